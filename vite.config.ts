@@ -1,0 +1,46 @@
+import tailwindcss from "@tailwindcss/vite";
+import react from "@vitejs/plugin-react";
+import { configDefaults, defineConfig } from "vitest/config";
+
+const apiTarget = process.env.API_TARGET ?? "http://127.0.0.1:4300";
+
+export default defineConfig({
+  plugins: [react(), tailwindcss()],
+  build: { outDir: "dist/web", assetsInlineLimit: 0, sourcemap: false },
+  server: {
+    host: "127.0.0.1",
+    watch: { ignored: ["**/.local/**"] },
+    proxy: { "/api": apiTarget, "/auth": apiTarget },
+  },
+  test: {
+    globalSetup: "tests/support/global-setup.ts",
+    reporters: ["default", "./tests/support/plain-reporter.ts"],
+    env: { TZ: "UTC" },
+    exclude: [...configDefaults.exclude, ".local/**"],
+    projects: [
+      { test: { name: "unit", include: ["tests/shared/**/*.test.ts", "tests/architecture/**/*.test.ts"], env: { TZ: "UTC" } } },
+      { test: { name: "api", include: ["tests/server/**/*.test.ts"], env: { TZ: "UTC" }, testTimeout: 20_000, hookTimeout: 60_000 } },
+      {
+        plugins: [react()],
+        test: {
+          name: "ui",
+          include: ["tests/src/**/*.test.tsx"],
+          environment: "jsdom",
+          setupFiles: ["tests/support/ui-setup.ts"],
+          env: { TZ: "UTC" },
+        },
+      },
+      {
+        test: {
+          name: "e2e",
+          include: ["tests/e2e/**/*.test.ts"],
+          env: { TZ: "UTC" },
+          testTimeout: 120_000,
+          hookTimeout: 180_000,
+          fileParallelism: false,
+          sequence: { groupOrder: 1 },
+        },
+      },
+    ],
+  },
+});
