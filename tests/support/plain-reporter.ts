@@ -10,6 +10,8 @@ export default class PlainReporter implements Reporter {
       const brokenFile = tests.length === 0 ? module.state() === "failed" : module.errors().length > 0;
       if (brokenFile) count.failed++;
     }
-    process.stdout.write(`\ntests: ${count.passed} passed, ${count.failed} failed, ${count.skipped + count.pending} skipped\n`);
+    process.stdout.write(
+      `\ntests: ${count.passed} passed, ${count.failed} failed, ${count.skipped + count.pending} skipped\n`,
+    );
   }
 }

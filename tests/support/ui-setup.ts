@@ -1,0 +1,41 @@
+import { cleanup } from "@testing-library/react";
+import { afterEach, beforeEach, expect, type MockInstance, vi } from "vitest";
+
+/** jsdom measures nothing, so nothing ever changes size. */
+class SilentResizeObserver implements ResizeObserver {
+  observe(): void {}
+  unobserve(): void {}
+  disconnect(): void {}
+}
+globalThis.ResizeObserver ??= SilentResizeObserver;
+
+/** jsdom knows the dialog element but not how to open and close it; only what tests can see is done here. */
+function openDialog(this: HTMLDialogElement): void {
+  if (this.open) throw new DOMException("the dialog is already open", "InvalidStateError");
+  this.open = true;
+}
+
+function closeDialog(this: HTMLDialogElement, value?: string): void {
+  if (!this.open) return;
+  this.open = false;
+  if (value !== undefined) this.returnValue = value;
+  this.dispatchEvent(new Event("close"));
+}
+
+HTMLDialogElement.prototype.show ??= openDialog;
+HTMLDialogElement.prototype.showModal ??= openDialog;
+HTMLDialogElement.prototype.close ??= closeDialog;
+
+let consoleError: MockInstance<typeof console.error>;
+
+beforeEach(() => {
+  consoleError = vi.spyOn(console, "error").mockImplementation(() => {});
+});
+
+/** A test that expects an error on the console takes it with `vi.mocked(console.error).mockClear()` after looking at it. */
+afterEach(() => {
+  cleanup();
+  const complaints = consoleError.mock.calls.map((words) => words.map(String).join(" "));
+  consoleError.mockRestore();
+  expect(complaints, "nothing unexpected on console.error").toEqual([]);
+});
