@@ -3,7 +3,10 @@ import type { ProblemType } from "./problem.ts";
 
 export type Method = "get" | "post" | "put" | "patch" | "delete";
 
-/** Who may call: anybody, anybody signed in, people of an active shop, its owners, or network admins. */
+/**
+ * Who may call: anybody; anybody signed in; people of an active shop and network admins; people of an active shop;
+ * only its owners; only network admins.
+ */
 export type Access = "anyone" | "signed-in" | "member" | "operator" | "owner" | "admin";
 
 export const NoInput = z.object({});
@@ -14,12 +17,13 @@ export interface Endpoint<
   Query extends z.ZodType = z.ZodType,
   Body extends z.ZodType = z.ZodType,
   Response extends z.ZodType = z.ZodType,
+  Who extends Access = Access,
 > {
   method: Method;
   /** Express path, `:name` for parameters. */
   path: string;
   summary: string;
-  access: Access;
+  access: Who;
   params: Params;
   query: Query;
   body: Body;
@@ -32,11 +36,17 @@ export interface Endpoint<
   problems: readonly ProblemType[];
 }
 
-interface EndpointInput<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodType, R extends z.ZodType> {
+interface EndpointInput<
+  R extends z.ZodType,
+  A extends Access,
+  P extends z.ZodType,
+  Q extends z.ZodType,
+  B extends z.ZodType,
+> {
   method: Method;
   path: string;
   summary: string;
-  access: Access;
+  access: A;
   params?: P;
   query?: Q;
   body?: B;
@@ -49,10 +59,11 @@ interface EndpointInput<P extends z.ZodType, Q extends z.ZodType, B extends z.Zo
 /** One endpoint, written once: the server parses with it, the client calls by it, the OpenAPI document lists it. */
 export function defineEndpoint<
   R extends z.ZodType,
+  A extends Access,
   P extends z.ZodType = NoInput,
   Q extends z.ZodType = NoInput,
   B extends z.ZodType = NoInput,
->(input: EndpointInput<P, Q, B, R>): Endpoint<P, Q, B, R> {
+>(input: EndpointInput<R, A, P, Q, B>): Endpoint<P, Q, B, R, A> {
   return {
     status: 200,
     mediaType: "application/json",

@@ -4,8 +4,8 @@ import { PeerGroupKey } from "../peers/peer-group.ts";
 import { type Metric, metrics } from "../recipes/metrics.ts";
 import { drynessLevels, heightControls, startMethods } from "./machines.ts";
 
-/** All that is ever said about how many shops or recipes stand behind a figure. */
-export const countBands = ["5-9", "10-19", "20-49", "50+"] as const;
+/** All that is ever said about how many shops or recipes stand behind a figure. "3-4" needs a quorum set below 5. */
+export const countBands = ["3-4", "5-9", "10-19", "20-49", "50+"] as const;
 export const CountBand = z.enum(countBands);
 export type CountBand = z.infer<typeof CountBand>;
 
@@ -41,6 +41,7 @@ export const ReleasedDistribution = z.object({
     .positive()
     .describe("(p75 - p25)/1.349, at least one rounding step. Stored unit; for feed and kerf in natural logs"),
   density: ReleasedDensity.nullable(),
+  figuresFrom: EditionRef.describe("The edition this metric's figures were computed for: may be older than the group's"),
 });
 export type ReleasedDistribution = z.infer<typeof ReleasedDistribution>;
 

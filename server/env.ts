@@ -1,0 +1,31 @@
+import { z } from "zod";
+
+const flag = z.enum(["0", "1"]).default("0").transform((value) => value === "1");
+
+/** Every setting of the API process: read once, refused at once when wrong. README lists them. */
+const Settings = z.object({
+  NODE_ENV: z.enum(["development", "test", "production"]).default("production"),
+  HOST: z.string().default("127.0.0.1"),
+  PORT: z.coerce.number().int().min(0).max(65_535).default(4300),
+  PUBLIC_URL: z.url().transform((url) => new URL(url).origin),
+  DATABASE_URL: z.string().min(1).describe("PostgreSQL as role web"),
+  DATABASE_POOL: z.coerce.number().int().min(1).max(200).default(10),
+  SESSION_SECRET: z.string().min(32, "needs 32 characters or more"),
+  OIDC_ISSUER: z.url(),
+  OIDC_CLIENT_ID: z.string().min(1),
+  OIDC_CLIENT_SECRET: z.string().min(1),
+  OIDC_PROVIDER_NAME: z.string().min(1).optional(),
+  TRUST_PROXY: z.coerce.number().int().min(0).max(5).default(0),
+  RATE_LIMIT_PER_MINUTE: z.coerce.number().int().min(1).default(600),
+  WEB_DIR: z.string().default("dist/web"),
+  DEMO: flag,
+  LOG_LEVEL: z.enum(["fatal", "error", "warn", "info", "debug", "silent"]).default("info"),
+});
+export type Settings = z.infer<typeof Settings>;
+
+export function readSettings(environment: NodeJS.ProcessEnv): Settings {
+  const parsed = Settings.safeParse(environment);
+  if (parsed.success) return parsed.data;
+  const lines = parsed.error.issues.map((issue) => `  ${issue.path.join(".")}: ${issue.message}`);
+  throw new Error(`Settings are missing or wrong (see README, Settings):\n${lines.join("\n")}`);
+}

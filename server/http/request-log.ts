@@ -1,0 +1,36 @@
+import { randomUUID } from "node:crypto";
+import type { RequestHandler } from "express";
+import type pino from "pino";
+import { pinoHttp } from "pino-http";
+
+/** One line a request: method, path, status, time, id. No query, header, address or body: they can name people. */
+export function requestLog(logger: pino.Logger): RequestHandler {
+  return pinoHttp({
+    logger,
+    genReqId: (_req, res) => {
+      const id = randomUUID();
+      res.setHeader("X-Request-Id", id);
+      return id;
+    },
+    serializers: {
+      req: (req: { id: string; method: string; url: string }) => ({
+        id: req.id,
+        method: req.method,
+        path: req.url.split("?")[0],
+      }),
+      res: (res: { statusCode: number }) => ({ status: res.statusCode }),
+      err: (error: Error & { code?: string; cause?: unknown }) => ({
+        type: error.name,
+        message: messageWithoutValues(error),
+        stack: error.stack?.split("\n").filter((line) => line.trimStart().startsWith("at ")).join("\n"),
+      }),
+    },
+    customLogLevel: (_req, res, error) => (error || res.statusCode >= 500 ? "error" : "info"),
+  });
+}
+
+/** A database error's message quotes the statement and its values; the cause alone does not. */
+function messageWithoutValues(error: Error): string {
+  const inner = error.cause instanceof Error ? error.cause : error;
+  return inner.message.split("\n")[0] ?? "";
+}
