@@ -6,6 +6,7 @@ const apiTarget = process.env.API_TARGET ?? "http://127.0.0.1:4300";
 
 export default defineConfig({
   plugins: [react(), tailwindcss()],
+  publicDir: "src/public",
   build: { outDir: "dist/web", assetsInlineLimit: 0, sourcemap: false },
   server: {
     host: "127.0.0.1",
@@ -18,13 +19,27 @@ export default defineConfig({
     env: { TZ: "UTC" },
     exclude: [...configDefaults.exclude, ".local/**"],
     projects: [
-      { test: { name: "unit", include: ["tests/shared/**/*.test.ts", "tests/architecture/**/*.test.ts"], env: { TZ: "UTC" } } },
-      { test: { name: "api", include: ["tests/server/**/*.test.ts"], env: { TZ: "UTC" }, testTimeout: 20_000, hookTimeout: 60_000 } },
+      {
+        test: {
+          name: "unit",
+          include: ["tests/shared/**/*.test.ts", "tests/architecture/**/*.test.ts"],
+          env: { TZ: "UTC" },
+        },
+      },
+      {
+        test: {
+          name: "api",
+          include: ["tests/server/**/*.test.ts"],
+          env: { TZ: "UTC" },
+          testTimeout: 20_000,
+          hookTimeout: 60_000,
+        },
+      },
       {
         plugins: [react()],
         test: {
           name: "ui",
-          include: ["tests/src/**/*.test.tsx"],
+          include: ["tests/src/**/*.test.{ts,tsx}"],
           environment: "jsdom",
           setupFiles: ["tests/support/ui-setup.ts"],
           env: { TZ: "UTC" },

@@ -1,0 +1,13 @@
+import { useLocation } from "react-router-dom";
+import { buttonClasses } from "../ui/button.tsx";
+import { signInHref } from "./sign-in-href.ts";
+
+/** Leaves the page for the sign-in provider and comes back to the same place. */
+export function SignInLink() {
+  const { pathname, search } = useLocation();
+  return (
+    <a href={signInHref(pathname + search)} className={buttonClasses("primary", true)}>
+      Sign in
+    </a>
+  );
+}

@@ -1,0 +1,75 @@
+import { X } from "lucide-react";
+import { type ReactNode, useEffect, useId, useRef } from "react";
+import { classNames } from "./class-names.ts";
+
+export interface DialogProps {
+  open: boolean;
+  /** Escape, the close button, or a press beside the dialog. */
+  onClose: () => void;
+  title: string;
+  children: ReactNode;
+  /** Buttons along the bottom; the act first, the way out last. */
+  actions?: ReactNode;
+  wide?: boolean;
+}
+
+/** A native modal dialog: the browser traps focus, and closing gives it back to what opened it. */
+export function Dialog({ open, onClose, title, children, actions, wide }: DialogProps) {
+  const dialog = useRef<HTMLDialogElement>(null);
+  const heading = useId();
+
+  useEffect(() => {
+    const element = dialog.current;
+    if (!open || !element) return;
+    const opener = document.activeElement;
+    element.showModal();
+    return () => {
+      element.close();
+      if (opener instanceof HTMLElement && opener.isConnected) opener.focus();
+    };
+  }, [open]);
+
+  if (!open) return null;
+  return (
+    // biome-ignore lint/a11y/useKeyWithClickEvents: Escape does the same, and the browser handles it
+    <dialog
+      ref={dialog}
+      aria-labelledby={heading}
+      onCancel={(event) => {
+        event.preventDefault();
+        onClose();
+      }}
+      onClick={(event) => {
+        if (event.target === event.currentTarget) onClose();
+      }}
+      className={classNames(
+        "w-[calc(100%-2rem)] max-h-[calc(100dvh-2rem)] overflow-y-auto rounded border border-line bg-surface shadow-float",
+        wide ? "max-w-3xl" : "max-w-lg",
+      )}
+    >
+      <div className="p-5">
+        <div className="mb-3 flex items-start justify-between gap-4">
+          <h2 id={heading} className="text-lg font-bold">
+            {title}
+          </h2>
+          <CloseButton onClick={onClose} />
+        </div>
+        {children}
+        {actions ? <div className="mt-5 flex flex-wrap gap-2">{actions}</div> : null}
+      </div>
+    </dialog>
+  );
+}
+
+function CloseButton({ onClick }: { onClick: () => void }) {
+  return (
+    <button
+      type="button"
+      aria-label="Close"
+      onClick={onClick}
+      className="-mt-2 -mr-2 inline-flex size-11 shrink-0 items-center justify-center rounded text-muted hover:bg-sunken hover:text-ink"
+    >
+      <X aria-hidden="true" size={20} />
+    </button>
+  );
+}
