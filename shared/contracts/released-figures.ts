@@ -29,7 +29,10 @@ export const ReleasedDensity = z.object({
   from: z.number().describe("Value at the first height, stored unit"),
   to: z.number().describe("Value at the last height, stored unit"),
   logScale: z.boolean().describe("The grid steps by equal factors rather than equal differences"),
-  heights: z.array(z.number().min(0).max(1)).min(2).describe("Height at each grid point over the highest, to 2 figures"),
+  heights: z
+    .array(z.number().min(0).max(1))
+    .min(2)
+    .describe("Height at each grid point over the highest, to 2 figures"),
 });
 export type ReleasedDensity = z.infer<typeof ReleasedDensity>;
 
@@ -41,7 +44,9 @@ export const ReleasedDistribution = z.object({
     .positive()
     .describe("(p75 - p25)/1.349, at least one rounding step. Stored unit; for feed and kerf in natural logs"),
   density: ReleasedDensity.nullable(),
-  figuresFrom: EditionRef.describe("The edition this metric's figures were computed for: may be older than the group's"),
+  figuresFrom: EditionRef.describe(
+    "The edition this metric's figures were computed for: may be older than the group's",
+  ),
 });
 export type ReleasedDistribution = z.infer<typeof ReleasedDistribution>;
 

@@ -1,0 +1,106 @@
+/** Why a text may not be shared; in the order they are looked for. */
+export type TextRefusal = "e-mail" | "phone" | "link" | "shop-name" | "person-name";
+
+export const textRefusalWords: Record<TextRefusal, string> = {
+  "e-mail": "It holds an e-mail address",
+  phone: "It holds what looks like a phone number",
+  link: "It holds a link or an account name",
+  "shop-name": "It holds your shop's name or part of it",
+  "person-name": "It holds the name of somebody at your shop",
+};
+
+export interface OwnNames {
+  shop: string;
+  people: readonly string[];
+}
+
+/** Words half the trade has in its name: they tell nobody apart. */
+const tradeWords = new Set(
+  `and the of for company shop works work fab fabs fabrication fabricating fabricators metal metals metalwork metalworks
+  steel iron plate sheet aluminium aluminum copper brass plasma cut cuts cutting weld welding welders machine machining
+  custom design designs art repair service services industries industrial manufacturing engineering forge tools limited`
+    .split(/\s+/)
+    .filter(Boolean),
+);
+
+/**
+ * Screens what an owner wrote for other members to read beside a listed recipe.
+ * Looks for what would name the shop or its people or lead to them, also in full-width letters, with accents or with
+ * letters spaced out. It cannot know every hint a text may give: the owner sees the text as others will before it goes.
+ * @returns every reason to refuse it; none when it may be shared
+ */
+export function screenText(text: string, own: OwnNames): TextRefusal[] {
+  const plain = plainLetters(text);
+  const found: Record<TextRefusal, boolean> = {
+    "e-mail": holdsEmail(plain),
+    phone: holdsPhone(plain),
+    link: holdsLink(plain),
+    "shop-name": holdsShopName(plain, own.shop),
+    "person-name": own.people.some((person) => holdsPerson(plain, person)),
+  };
+  return (Object.keys(found) as TextRefusal[]).filter((reason) => found[reason]);
+}
+
+/** Compatibility forms unified, accents and invisible characters gone; case kept. */
+function plainLetters(text: string): string {
+  return text
+    .normalize("NFKD")
+    .replace(/[\p{M}\p{Cf}]/gu, "")
+    .replace(/\s+/g, " ");
+}
+
+function wordsOf(text: string): string[] {
+  return (
+    plainLetters(text)
+      .toLowerCase()
+      .match(/[\p{L}\p{N}]+/gu) ?? []
+  );
+}
+
+const topDomain = "com|net|org|info|biz|shop|store|io|co|us|uk|ca|eu|de|fr|it|es|nl|au|nz|me|tv|app|online|site";
+
+function holdsEmail(text: string): boolean {
+  const at = String.raw`\s*(?:@|[([{]\s*at\s*[)\]}])\s*`;
+  const dot = String.raw`\s*(?:\.|[([{]\s*dot\s*[)\]}])\s*`;
+  const spelled = /\b[\w.+-]+\s+at\s+[\w-]+\s+dot\s+[a-z]{2,}/i;
+  return new RegExp(String.raw`[\w.+-]+${at}[\w-]+(?:${dot}[\w-]+)+`, "i").test(text) || spelled.test(text);
+}
+
+function holdsLink(text: string): boolean {
+  const bare = new RegExp(String.raw`\b[a-z0-9-]{2,}(?:\.|\s?[([]?\bdot\b[)\]]?\s?)(?:${topDomain})\b`, "i");
+  return /:\/\/|\bwww\b/i.test(text) || /(?:^|[\s(])@[\w.]{2,}/.test(text) || bare.test(text);
+}
+
+/** Runs of digits as people write phone numbers. Feeds, volts and sizes in a row must not look like one. */
+function holdsPhone(text: string): boolean {
+  const runs = text.match(/\+?\(?\d(?:[\s().\-/]{0,2}\d){6,}/g) ?? [];
+  return runs.some((run) => {
+    const groups = run.match(/\d+/g) ?? [];
+    const sizes = groups.map((group) => group.length).join("-");
+    if (run.startsWith("+") || groups.some((group) => group.length >= 7)) return true;
+    if (/^(?:1-)?3-3-4$|^3-4$/.test(sizes)) return true;
+    return /^\(?0\d/.test(run);
+  });
+}
+
+function holdsShopName(text: string, shop: string): boolean {
+  const telling = wordsOf(shop).filter((word) => word.length >= 3 && !tradeWords.has(word));
+  const words = new Set(wordsOf(text));
+  if (telling.some((word) => words.has(word))) return true;
+  const whole = wordsOf(shop).join("");
+  return whole.length >= 5 && wordsOf(text).join("").includes(whole);
+}
+
+/** A last name in any case; a first name only with a capital, as "will", "mark" and "art" are also words. */
+function holdsPerson(text: string, person: string): boolean {
+  const names = wordsOf(person).filter((name) => name.length >= 2);
+  const last = names.at(-1);
+  if (last === undefined) return false;
+  const words: string[] = text.match(/[\p{L}\p{N}]+/gu) ?? [];
+  const isNamed = (name: string, anyCase: boolean) =>
+    words.some((word) => word.toLowerCase() === name && (anyCase || /^\p{Lu}/u.test(word)));
+  if (names.length > 1 && isNamed(last, last.length >= 3)) return true;
+  if (names.slice(0, Math.max(1, names.length - 1)).some((name) => isNamed(name, false))) return true;
+  const whole = names.join("");
+  return whole.length >= 6 && wordsOf(text).join("").includes(whole);
+}
