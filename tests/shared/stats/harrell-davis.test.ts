@@ -7,7 +7,10 @@ import classic from "#tests/data/harrell-davis.json" with { type: "json" };
 import weighted from "#tests/data/harrell-davis-weighted.json" with { type: "json" };
 
 const sample = fc.array(
-  fc.record({ value: fc.double({ min: -1000, max: 1000, noNaN: true }), weight: fc.double({ min: 0.01, max: 50, noNaN: true }) }),
+  fc.record({
+    value: fc.double({ min: -1000, max: 1000, noNaN: true }),
+    weight: fc.double({ min: 0.01, max: 50, noNaN: true }),
+  }),
   { minLength: 1, maxLength: 40 },
 );
 const probability = fc.double({ min: 0, max: 1, noNaN: true });
@@ -20,11 +23,14 @@ test.each(Object.entries(classic.samples))("reproduces the classic estimates of 
 });
 
 // Akinshin (2023), arXiv:2304.07265, evaluated at 50 digits.
-test.each(Object.entries(weighted.samples))("reproduces the weighted estimates of %s", (_, { x, w, probs, estimate }) => {
-  probs.forEach((p, i) => {
-    expect(Math.abs(harrellDavis(x, p, w) / estimate[i]! - 1)).toBeLessThan(1e-12);
-  });
-});
+test.each(Object.entries(weighted.samples))(
+  "reproduces the weighted estimates of %s",
+  (_, { x, w, probs, estimate }) => {
+    probs.forEach((p, i) => {
+      expect(Math.abs(harrellDavis(x, p, w) / estimate[i]! - 1)).toBeLessThan(1e-12);
+    });
+  },
+);
 
 test("equal weights, whatever their size, give the classic estimator", () => {
   fc.assert(
@@ -42,7 +48,11 @@ test("a common factor on the weights, observations of weight 0 and the order cha
       const x = s.map((o) => o.value);
       const w = s.map((o) => o.weight);
       const estimate = harrellDavis(x, p, w);
-      const scaled = harrellDavis(x, p, w.map((v) => v * factor));
+      const scaled = harrellDavis(
+        x,
+        p,
+        w.map((v) => v * factor),
+      );
       const padded = harrellDavis([-5000, ...x, 5000], p, [0, ...w, 0]);
       const reversed = harrellDavis(x.toReversed(), p, w.toReversed());
       for (const same of [scaled, padded, reversed]) expect(Math.abs(same - estimate)).toBeLessThan(1e-11 * 2000);
@@ -56,7 +66,13 @@ test("follows a change of unit and zero, and stays within the sample", () => {
       const x = s.map((o) => o.value);
       const w = s.map((o) => o.weight);
       const estimate = harrellDavis(x, p, w);
-      expect(harrellDavis(x.map((v) => 1.8 * v + 32), p, w)).toBeCloseTo(1.8 * estimate + 32, 8);
+      expect(
+        harrellDavis(
+          x.map((v) => 1.8 * v + 32),
+          p,
+          w,
+        ),
+      ).toBeCloseTo(1.8 * estimate + 32, 8);
       expect(estimate).toBeGreaterThanOrEqual(Math.min(...x));
       expect(estimate).toBeLessThanOrEqual(Math.max(...x));
     }),
