@@ -1,6 +1,6 @@
 import { randomBytes } from "node:crypto";
 import { exportJWK, generateKeyPair, type JWK } from "jose";
-import Provider, { type Configuration } from "oidc-provider";
+import Provider, { type Configuration, interactionPolicy } from "oidc-provider";
 import type { DemoAccount } from "./accounts.ts";
 import { memoryAdapters } from "./memory-adapter.ts";
 import { problemPage, signedOutPage, signOutPage } from "./page.ts";
@@ -28,6 +28,20 @@ const loadExistingGrant: Configuration["loadExistingGrant"] = async (ctx) => {
   await grant.save();
   return grant;
 };
+
+/** Whoever tries the demonstration changes between people all the time: ask at every sign-in who it is to be. */
+function alwaysAskWho(): interactionPolicy.DefaultPolicy {
+  const policy = interactionPolicy.base();
+  const { REQUEST_PROMPT, NO_NEED_TO_PROMPT } = interactionPolicy.Check;
+  policy
+    .get("login")
+    ?.checks.add(
+      new interactionPolicy.Check("person_chosen_each_time", "the person is chosen at each sign-in", (ctx) =>
+        ctx.oidc.result?.login ? NO_NEED_TO_PROMPT : REQUEST_PROMPT,
+      ),
+    );
+  return policy;
+}
 
 const features: Configuration["features"] = {
   devInteractions: { enabled: false },
@@ -78,7 +92,7 @@ export function createProvider(issuer: string, client: Client, accounts: readonl
     features,
     findAccount: findAccount(accounts),
     loadExistingGrant,
-    interactions: { url: (_ctx, interaction) => `/sign-in/${interaction.uid}` },
+    interactions: { policy: alwaysAskWho(), url: (_ctx, interaction) => `/sign-in/${interaction.uid}` },
     renderError: (ctx, out) => {
       ctx.type = "html";
       ctx.body = problemPage("Sign-in did not work", [out.error, out.error_description].filter(Boolean).join(": "));
