@@ -1,6 +1,8 @@
 import { BookOpen, ChartNoAxesColumn, ClipboardCheck, Compass, Inbox, Library, Users } from "lucide-react";
 import type { Session } from "#shared/contracts/accounts.ts";
+import { exportBookCsv, exportBookJson } from "#shared/contracts/recipes.ts";
 import type { Place } from "./app-frame.tsx";
+import type { MenuLink } from "./shop-menu.tsx";
 
 const shopPlaces: readonly Place[] = [
   { label: "Recipes", to: "/recipes", icon: BookOpen },
@@ -19,4 +21,16 @@ const adminPlaces: readonly Place[] = [
 export function placesFor(session: Pick<Session, "shop" | "admin">): readonly Place[] {
   if (session.shop?.state === "active") return shopPlaces;
   return session.admin ? adminPlaces : [];
+}
+
+/** What the menu in the corner adds: the shop's own things, out of the way of daily work. */
+export function menuLinksFor(session: Pick<Session, "shop" | "admin">): readonly MenuLink[] {
+  const network = session.admin && session.shop ? adminPlaces.map(({ label, to }) => ({ label, to })) : [];
+  if (session.shop?.state !== "active") return network;
+  return [
+    { label: "Machines", to: "/machines" },
+    { label: "Export the book (table)", to: exportBookCsv.path, download: true },
+    { label: "Export the book (whole)", to: exportBookJson.path, download: true },
+    ...network,
+  ];
 }

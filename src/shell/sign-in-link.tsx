@@ -1,6 +1,6 @@
 import { useLocation } from "react-router-dom";
+import { signInHref } from "../lib/sign-in-href.ts";
 import { buttonClasses } from "../ui/button.tsx";
-import { signInHref } from "./sign-in-href.ts";
 
 /** Leaves the page for the sign-in provider and comes back to the same place. */
 export function SignInLink() {

@@ -48,7 +48,6 @@ export function Button({ kind, small, pending = false, onClick, className, type 
   return (
     <button
       {...rest}
-      // biome-ignore lint/a11y/useButtonType: it defaults to "button" above
       type={type}
       onClick={act}
       aria-disabled={busy || undefined}

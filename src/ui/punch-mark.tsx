@@ -11,15 +11,15 @@ export function PunchMarkShape({ x, y, radius = 9 }: { x: number; y: number; rad
   );
 }
 
-/** The same mark on its own, in text or a legend. */
-export function PunchMark({ size = 16, label }: { size?: number; label?: string }) {
+/** The same mark on its own, beside the words that say what it is. */
+export function PunchMark({ size = 16 }: { size?: number }) {
   return (
     <svg
       width={size}
       height={size}
       viewBox="0 0 24 24"
+      aria-hidden="true"
       className="inline-block shrink-0 align-[-0.15em]"
-      {...(label ? { role: "img", "aria-label": label } : { "aria-hidden": true })}
     >
       <PunchMarkShape x={12} y={12} />
     </svg>
