@@ -1,5 +1,5 @@
 import { type Request, type Response, Router } from "express";
-import { Passport } from "passport";
+import { Passport, type Strategy } from "passport";
 import type { Db } from "#server/db/client.ts";
 import { ProblemError } from "../http/problem.ts";
 import { providerDiscovery } from "./provider.ts";
@@ -32,7 +32,7 @@ export function signIn(db: Db, settings: SignInSettings) {
       callbackUrl: `${settings.publicUrl}/auth/callback`,
       findUser: (identity) => findOrMakeUser(db, settings.providerName, identity),
     });
-    passport.use(strategy as unknown as Parameters<typeof passport.use>[0]);
+    passport.use(strategy as unknown as Strategy);
     ready = true;
   };
 

@@ -27,7 +27,9 @@ export function providerDiscovery(issuer: string): () => Promise<Discovery> {
       known = found;
       return known;
     } catch {
-      throw new ProblemError("sign-in-unavailable", { detail: "Sign-in does not work right now. Try again in a minute." });
+      throw new ProblemError("sign-in-unavailable", {
+        detail: "Sign-in does not work right now. Try again in a minute.",
+      });
     }
   };
 }

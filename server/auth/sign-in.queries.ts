@@ -7,13 +7,19 @@ import { users } from "#server/db/schema/users.ts";
 export type UserRow = typeof users.$inferSelect;
 
 export async function findUserByIdentity(tx: Db, provider: string, subject: string): Promise<UserRow | undefined> {
-  const [row] = await tx.select().from(users).where(and(eq(users.provider, provider), eq(users.subject, subject)));
+  const [row] = await tx
+    .select()
+    .from(users)
+    .where(and(eq(users.provider, provider), eq(users.subject, subject)));
   return row;
 }
 
 /** A person known by e-mail alone, who has never signed in. */
 export async function findUserNeverSignedIn(tx: Db, email: string): Promise<UserRow | undefined> {
-  const [row] = await tx.select().from(users).where(and(eq(users.email, email), isNull(users.subject)));
+  const [row] = await tx
+    .select()
+    .from(users)
+    .where(and(eq(users.email, email), isNull(users.subject)));
   return row;
 }
 

@@ -1,6 +1,12 @@
 import type { Db } from "#server/db/client.ts";
 import { actAs } from "../http/actor.queries.ts";
-import { acceptInvitation, bindIdentity, findUserByIdentity, findUserNeverSignedIn, insertUser } from "./sign-in.queries.ts";
+import {
+  acceptInvitation,
+  bindIdentity,
+  findUserByIdentity,
+  findUserNeverSignedIn,
+  insertUser,
+} from "./sign-in.queries.ts";
 import type { Identity } from "./strategy.ts";
 
 /**
@@ -14,7 +20,8 @@ export function findOrMakeUser(db: Db, provider: string, identity: Identity): Pr
     const known = await findUserByIdentity(tx, provider, identity.sub);
     const prepared = known || !identity.email_verified ? undefined : await findUserNeverSignedIn(tx, identity.email);
     if (prepared) await bindIdentity(tx, prepared.id, provider, identity.sub, name);
-    const user = known ?? prepared ?? (await insertUser(tx, { provider, subject: identity.sub, email: identity.email, name }));
+    const user =
+      known ?? prepared ?? (await insertUser(tx, { provider, subject: identity.sub, email: identity.email, name }));
     if (identity.email_verified) {
       await actAs(tx, { user_id: user.id });
       await acceptInvitation(tx, user.id, identity.email);

@@ -39,7 +39,13 @@ const signIns = new WeakMap<Request, PendingSignIn>();
 
 /** passport-openidconnect's own store keeps one sign-in a session, so that two tabs break each other. */
 const stateStore = {
-  store(req: Request, _context: unknown, _state: unknown, _meta: unknown, done: (error: null, state?: string) => void): void {
+  store(
+    req: Request,
+    _context: unknown,
+    _state: unknown,
+    _meta: unknown,
+    done: (error: null, state?: string) => void,
+  ): void {
     done(null, signIns.get(req)?.state);
   },
   verify(req: Request, state: unknown, done: (error: null, context: unknown, info?: unknown) => void): void {

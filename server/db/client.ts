@@ -30,7 +30,18 @@ export function openDatabase(url: string, options: { max?: number; statementTime
 }
 
 const unavailable = new Set([
-  "ECONNREFUSED", "ECONNRESET", "EPIPE", "ETIMEDOUT", "57P01", "57P02", "57P03", "53300", "08000", "08001", "08003", "08006",
+  "ECONNREFUSED",
+  "ECONNRESET",
+  "EPIPE",
+  "ETIMEDOUT",
+  "57P01",
+  "57P02",
+  "57P03",
+  "53300",
+  "08000",
+  "08001",
+  "08003",
+  "08006",
 ]);
 
 /** The error beneath Drizzle's wrapping, with PostgreSQL's code and the constraint it names. */

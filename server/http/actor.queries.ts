@@ -6,7 +6,10 @@ import { networkAdmins, users } from "#server/db/schema/users.ts";
 import { type Actor, visitor } from "./actor.ts";
 
 /** Row-level security reads these settings; they end with the transaction. */
-export async function actAs(tx: Db, settings: Partial<Record<"user_id" | "shop_id" | "email" | "identity" | "admin", string>>) {
+export async function actAs(
+  tx: Db,
+  settings: Partial<Record<"user_id" | "shop_id" | "email" | "identity" | "admin", string>>,
+) {
   const calls = Object.entries(settings).map(([name, value]) => sql`set_config(${`app.${name}`}, ${value}, true)`);
   await tx.execute(sql`select ${sql.join(calls, sql`, `)}`);
 }

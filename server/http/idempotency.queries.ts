@@ -12,7 +12,12 @@ export interface RememberedAnswer {
  * Claims a key for this transaction. A second request with the same key waits here until the first has ended, then
  * finds its answer. Returns that answer, or undefined when the key is new.
  */
-export async function claimKey(tx: Db, userId: string, key: string, requestDigest: string): Promise<RememberedAnswer | undefined> {
+export async function claimKey(
+  tx: Db,
+  userId: string,
+  key: string,
+  requestDigest: string,
+): Promise<RememberedAnswer | undefined> {
   const claimed = await tx
     .insert(idempotencyKeys)
     .values({ userId, key, requestDigest })
@@ -26,7 +31,13 @@ export async function claimKey(tx: Db, userId: string, key: string, requestDiges
   return row;
 }
 
-export async function rememberAnswer(tx: Db, userId: string, key: string, status: number, response: unknown): Promise<void> {
+export async function rememberAnswer(
+  tx: Db,
+  userId: string,
+  key: string,
+  status: number,
+  response: unknown,
+): Promise<void> {
   await tx
     .update(idempotencyKeys)
     .set({ status, response })

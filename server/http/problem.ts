@@ -1,6 +1,12 @@
 import type { ErrorRequestHandler } from "express";
-import { type FieldProblem, type Problem, type ProblemType, problemTypes, problemTypeUri } from "#shared/contracts/problem.ts";
 import { isDatabaseUnavailable } from "#server/db/client.ts";
+import {
+  type FieldProblem,
+  type Problem,
+  type ProblemType,
+  problemTypes,
+  problemTypeUri,
+} from "#shared/contracts/problem.ts";
 
 interface Extra {
   detail?: string;

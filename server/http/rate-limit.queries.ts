@@ -20,7 +20,10 @@ export async function countHit(db: Db, caller: string, windowMs: number): Promis
 }
 
 export async function uncountHit(db: Db, caller: string): Promise<void> {
-  await db.update(rateLimits).set({ hits: sql`greatest(${rateLimits.hits} - 1, 0)` }).where(eq(rateLimits.caller, caller));
+  await db
+    .update(rateLimits)
+    .set({ hits: sql`greatest(${rateLimits.hits} - 1, 0)` })
+    .where(eq(rateLimits.caller, caller));
 }
 
 export async function forgetCaller(db: Db, caller: string): Promise<void> {

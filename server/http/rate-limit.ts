@@ -22,7 +22,10 @@ function postgresStore(db: Db, name: string, windowMs: number): Store {
 function callerKey(req: Request, secret: string): string {
   const user = req.user as { id: string } | undefined;
   if (user) return user.id;
-  return createHmac("sha256", secret).update(ipKeyGenerator(req.ip ?? "")).digest("base64url").slice(0, 22);
+  return createHmac("sha256", secret)
+    .update(ipKeyGenerator(req.ip ?? ""))
+    .digest("base64url")
+    .slice(0, 22);
 }
 
 export function limitRate(db: Db, secret: string, name: string, perMinute: number): RequestHandler {

@@ -22,7 +22,10 @@ export function requestLog(logger: pino.Logger): RequestHandler {
       err: (error: Error & { code?: string; cause?: unknown }) => ({
         type: error.name,
         message: messageWithoutValues(error),
-        stack: error.stack?.split("\n").filter((line) => line.trimStart().startsWith("at ")).join("\n"),
+        stack: error.stack
+          ?.split("\n")
+          .filter((line) => line.trimStart().startsWith("at "))
+          .join("\n"),
       }),
     },
     customLogLevel: (_req, res, error) => (error || res.statusCode >= 500 ? "error" : "info"),

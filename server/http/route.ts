@@ -1,10 +1,10 @@
 import { createHash } from "node:crypto";
 import type { Request, RequestHandler, Response, Router } from "express";
 import type { z } from "zod";
-import type { Access, Endpoint } from "#shared/contracts/endpoint.ts";
 import type { Db } from "#server/db/client.ts";
-import { type Actor, type ActorFor, requireAccess } from "./actor.ts";
+import type { Access, Endpoint } from "#shared/contracts/endpoint.ts";
 import { becomeActor } from "./actor.queries.ts";
+import { type Actor, type ActorFor, requireAccess } from "./actor.ts";
 import { claimKey, rememberAnswer } from "./idempotency.queries.ts";
 import { ProblemError } from "./problem.ts";
 import { parsePart } from "./validation.ts";
@@ -32,7 +32,13 @@ interface Answer {
 }
 
 /** Binds a contract to its handler: signs in, checks the role, parses both ways, holds the transaction, sets the status. */
-export function route<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodType, R extends z.ZodType, Who extends Access>(
+export function route<
+  P extends z.ZodType,
+  Q extends z.ZodType,
+  B extends z.ZodType,
+  R extends z.ZodType,
+  Who extends Access,
+>(
   router: Router,
   db: Db,
   endpoint: Endpoint<P, Q, B, R, Who>,
@@ -44,7 +50,13 @@ export function route<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodT
     const answer = await db.transaction(async (tx): Promise<Answer> => {
       const actor = await becomeActor(tx, signedInUser(req));
       requireAccess(actor, endpoint.access);
-      const context = { ...parseRequest(endpoint, req, actor), tx, actor: actor as ActorFor<Who>, req, ...replyTools(req, res) };
+      const context = {
+        ...parseRequest(endpoint, req, actor),
+        tx,
+        actor: actor as ActorFor<Who>,
+        req,
+        ...replyTools(req, res),
+      };
       return once(tx, actor, endpoint, req, async () => {
         const result = await handler(context);
         if (result === notModified) return { status: 304, body: undefined };
@@ -88,13 +100,21 @@ function replyTools(req: Request, res: Response) {
 }
 
 /** A POST sent again with the same Idempotency-Key gets the first answer and does nothing twice. */
-async function once(tx: Db, actor: Actor, endpoint: Endpoint, req: Request, work: () => Promise<Answer>): Promise<Answer> {
+async function once(
+  tx: Db,
+  actor: Actor,
+  endpoint: Endpoint,
+  req: Request,
+  work: () => Promise<Answer>,
+): Promise<Answer> {
   const key = req.get("Idempotency-Key");
   if (endpoint.method !== "post" || key === undefined || actor.userId === null) return work();
   if (!/^[\w-]{8,64}$/.test(key)) {
     throw new ProblemError("invalid-request", { detail: "Idempotency-Key needs 8 to 64 letters, digits, - or _" });
   }
-  const digest = createHash("sha256").update(`${req.originalUrl}\n${JSON.stringify(req.body)}`).digest("hex");
+  const digest = createHash("sha256")
+    .update(`${req.originalUrl}\n${JSON.stringify(req.body)}`)
+    .digest("hex");
   const known = await claimKey(tx, actor.userId, key, digest);
   if (known) {
     if (known.requestDigest !== digest || known.status === null) throw new ProblemError("key-reused");

@@ -1,33 +1,22 @@
 import type { z } from "zod";
 import type { FieldProblem } from "#shared/contracts/problem.ts";
-import { metricDefinitions, nozzleRangeMm, type Range, thicknessRangeMm } from "#shared/recipes/metrics.ts";
-import { limitText, type TypedQuantity } from "#shared/units/format.ts";
-import type { UnitSystem } from "#shared/units/units.ts";
 import { ProblemError } from "./problem.ts";
-
-const limits: Record<string, { quantity: TypedQuantity; hard: Range }> = {
-  ...metricDefinitions,
-  thicknessMm: { quantity: "thickness", hard: thicknessRangeMm },
-  nozzleMm: { quantity: "nozzle", hard: nozzleRangeMm },
-};
 
 function pointerTo(path: readonly PropertyKey[]): string {
   return path.map((part) => `/${String(part).replaceAll("~", "~0").replaceAll("/", "~1")}`).join("");
 }
 
-/** A setpoint out of range is answered with the allowed range in the member's own unit. */
-function detailOf(issue: z.core.$ZodIssue, units: UnitSystem): string {
-  const limit = limits[String(issue.path.at(-1))];
-  const outOfRange = issue.code === "too_big" || issue.code === "too_small";
-  return limit && outOfRange ? `Allowed: ${limitText(limit.hard, limit.quantity, units)}` : issue.message;
-}
-
 /** Parses one part of a request against its contract; a breach is a 400 with a pointer per field. */
-export function parsePart<Schema extends z.ZodType>(schema: Schema, part: "body" | "query", value: unknown, units: UnitSystem): z.output<Schema> {
+export function parsePart<Schema extends z.ZodType>(
+  schema: Schema,
+  part: "body" | "query",
+  value: unknown,
+  _units: "metric" | "inch",
+): z.output<Schema> {
   const parsed = schema.safeParse(value);
   if (parsed.success) return parsed.data;
   const errors: FieldProblem[] = parsed.error.issues.map((issue) => ({
-    detail: detailOf(issue, units),
+    detail: issue.message,
     pointer: part === "body" ? pointerTo(issue.path) : `?${issue.path.map(String).join(".")}`,
   }));
   throw new ProblemError("invalid-request", { errors });

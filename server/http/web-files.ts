@@ -8,7 +8,10 @@ export function webFiles(directory: string): Router {
   const root = path.resolve(directory);
   const page = path.join(root, "index.html");
   const router = Router();
-  router.use("/assets", express.static(path.join(root, "assets"), { immutable: true, maxAge: "1y", fallthrough: false, index: false }));
+  router.use(
+    "/assets",
+    express.static(path.join(root, "assets"), { immutable: true, maxAge: "1y", fallthrough: false, index: false }),
+  );
   router.use(express.static(root, { index: false, maxAge: "1h" }));
   router.get("/{*path}", (_req, res, next) => {
     if (!existsSync(page)) return next(new ProblemError("not-found", { detail: "The application has not been built" }));

@@ -8,7 +8,12 @@ export const themes = ["system", "light", "dark"] as const;
 export const Session = z.object({
   user: z.object({ id: z.uuid(), name: z.string(), email: z.string() }).nullable(),
   shop: z
-    .object({ id: z.uuid(), name: z.string(), state: z.enum(["active", "suspended"]), role: z.enum(["owner", "operator"]) })
+    .object({
+      id: z.uuid(),
+      name: z.string(),
+      state: z.enum(["active", "suspended"]),
+      role: z.enum(["owner", "operator"]),
+    })
     .nullable(),
   admin: z.boolean(),
   units: z.enum(unitSystemNames),

@@ -68,4 +68,3 @@ export const declineApplication = defineEndpoint({
   response: Application,
   problems: ["not-found", "already-decided"],
 });
-

@@ -54,7 +54,8 @@ export const getCurrentEdition = defineEndpoint({
 export const getEditionMaterial = defineEndpoint({
   method: "get",
   path: "/api/editions/:id/materials/:material/:gas",
-  summary: "Every group an edition shows of one metal and gas, density left out; a group not in the list has too few shops",
+  summary:
+    "Every group an edition shows of one metal and gas, density left out; a group not in the list has too few shops",
   access: "member",
   params: z.object({ id: z.uuid(), material: z.enum(materials), gas: z.enum(processGases) }),
   response: z.object({ edition: PublishedEdition, groups: z.array(PeerGroupFigures), network: NetworkFigures }),

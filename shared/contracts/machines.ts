@@ -28,10 +28,20 @@ export const MachineInput = z.object({
   name: z.string().trim().min(1, "Give the machine a name").max(60),
   powerSourceMaxCurrentA: z.number().min(10).max(400),
   startMethod: z.enum(startMethods),
-  torchPressureBar: z.number().min(2).max(9).nullable().describe("Air pressure available at the torch while it flows, bar gauge"),
+  torchPressureBar: z
+    .number()
+    .min(2)
+    .max(9)
+    .nullable()
+    .describe("Air pressure available at the torch while it flows, bar gauge"),
   dryness: z.enum(drynessLevels),
   heightControl: z.enum(heightControls),
-  heightControlSampleHz: z.number().min(0.1).max(100_000).nullable().describe("How often the height control reads the arc voltage"),
+  heightControlSampleHz: z
+    .number()
+    .min(0.1)
+    .max(100_000)
+    .nullable()
+    .describe("How often the height control reads the arc voltage"),
   topFeedMmMin: z.number().min(50).max(100_000),
   note: z.string().trim().max(2000).default("").describe("Private to the shop, never shared"),
 });

@@ -1,8 +1,8 @@
 import { z } from "zod";
 import { metrics } from "../recipes/metrics.ts";
+import { PublishedEdition } from "./editions.ts";
 import { defineEndpoint } from "./endpoint.ts";
 import { Recipe } from "./recipes.ts";
-import { PublishedEdition } from "./editions.ts";
 
 export const StandingWord = z.enum(["typical", "high", "low", "unusually high", "unusually low"]);
 

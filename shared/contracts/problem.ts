@@ -27,7 +27,9 @@ export type ProblemType = keyof typeof problemTypes;
 
 export const FieldProblem = z.object({
   detail: z.string(),
-  pointer: z.string().describe("JSON Pointer (RFC 6901) to the field in the request body, or `?name` for a query parameter"),
+  pointer: z
+    .string()
+    .describe("JSON Pointer (RFC 6901) to the field in the request body, or `?name` for a query parameter"),
 });
 export type FieldProblem = z.infer<typeof FieldProblem>;
 

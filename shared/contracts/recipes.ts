@@ -39,10 +39,13 @@ export const RecipeContent = RecipeSubject.extend({
   setpoints: SetpointValues,
   note: z.string().trim().max(2000).default("").describe("Note to self: private to the shop, never shared"),
 }).check(
-  z.refine(({ setpoints: s }) => s.pierceHeightMm === null || s.cutHeightMm === null || s.pierceHeightMm >= s.cutHeightMm, {
-    path: ["setpoints", "pierceHeightMm"],
-    error: "Pierce height cannot be below cut height",
-  }),
+  z.refine(
+    ({ setpoints: s }) => s.pierceHeightMm === null || s.cutHeightMm === null || s.pierceHeightMm >= s.cutHeightMm,
+    {
+      path: ["setpoints", "pierceHeightMm"],
+      error: "Pierce height cannot be below cut height",
+    },
+  ),
 );
 export type RecipeContent = z.infer<typeof RecipeContent>;
 
@@ -77,7 +80,15 @@ export const Recipe = z.object({
 export type Recipe = z.infer<typeof Recipe>;
 
 export const recipeSorts = [
-  "changed", "material", "thickness", "nozzle", "machine", "current", "feed", "voltage", "pressure",
+  "changed",
+  "material",
+  "thickness",
+  "nozzle",
+  "machine",
+  "current",
+  "feed",
+  "voltage",
+  "pressure",
 ] as const;
 
 export const RecipeQuery = PageQuery.extend({
@@ -86,7 +97,12 @@ export const RecipeQuery = PageQuery.extend({
   machineId: z.uuid().optional(),
   state: z.enum(recipeStates).optional(),
   sharing: z.enum(sharingLevels).optional(),
-  thicknessMm: z.coerce.number().min(thicknessRangeMm.min).max(thicknessRangeMm.max).optional().describe("Recipes of its R10 thickness band"),
+  thicknessMm: z.coerce
+    .number()
+    .min(thicknessRangeMm.min)
+    .max(thicknessRangeMm.max)
+    .optional()
+    .describe("Recipes of its R10 thickness band"),
   nozzleMm: z.coerce.number().min(nozzleRangeMm.min).max(nozzleRangeMm.max).optional(),
   sort: z.enum(recipeSorts).default("changed"),
   order: z.enum(["asc", "desc"]).default("desc"),

@@ -11,8 +11,12 @@ export const SharingPreview = z.object({
   level: z.enum(sharingLevels),
   counts: z.boolean().describe("The setpoints enter the peer group's distributions at the next edition"),
   groupLabel: z.string(),
-  listed: ListedRecipe.omit({ id: true }).nullable().describe("The nameless copy exactly as an edition would hold it; null unless listed"),
-  staysHere: z.array(z.object({ what: z.string(), value: z.string() })).describe("What never leaves the shop, with the shop's own values"),
+  listed: ListedRecipe.omit({ id: true })
+    .nullable()
+    .describe("The nameless copy exactly as an edition would hold it; null unless listed"),
+  staysHere: z
+    .array(z.object({ what: z.string(), value: z.string() }))
+    .describe("What never leaves the shop, with the shop's own values"),
 });
 export type SharingPreview = z.infer<typeof SharingPreview>;
 

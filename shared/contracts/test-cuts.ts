@@ -12,24 +12,31 @@ export const topEdgeLabels: Record<(typeof topEdges)[number], string> = {
 };
 
 /** One cut made to try a recipe, as the operator saw and measured it. */
-export const TestCutInput = z.object({
-  versionNumber: z.number().int().min(1).describe("The recipe version that was cut"),
-  cutAt: z.iso.datetime({ offset: true }),
-  cutThrough: z.boolean(),
-  dross: z.enum(drossAmounts),
-  topEdge: z.enum(topEdges),
-  bevelDeg: z.number().min(-45).max(45).nullable().describe("Degrees; positive when the top is narrower than the bottom"),
-  kerfWidthMm: z.number().min(0.3).max(6).nullable(),
-  uMm: z.number().min(0).max(20).nullable().describe("Perpendicularity or angularity tolerance u of ISO 9013, mm"),
-  rz5Um: z.number().min(0).max(2000).nullable().describe("Mean height of the profile Rz5 of ISO 9013, micrometres"),
-  acceptable: z.boolean(),
-  note: z.string().trim().max(2000).default(""),
-}).check(
-  z.refine((cut) => cut.cutThrough || !cut.acceptable, {
-    path: ["acceptable"],
-    error: "A cut that did not go through cannot be acceptable",
-  }),
-);
+export const TestCutInput = z
+  .object({
+    versionNumber: z.number().int().min(1).describe("The recipe version that was cut"),
+    cutAt: z.iso.datetime({ offset: true }),
+    cutThrough: z.boolean(),
+    dross: z.enum(drossAmounts),
+    topEdge: z.enum(topEdges),
+    bevelDeg: z
+      .number()
+      .min(-45)
+      .max(45)
+      .nullable()
+      .describe("Degrees; positive when the top is narrower than the bottom"),
+    kerfWidthMm: z.number().min(0.3).max(6).nullable(),
+    uMm: z.number().min(0).max(20).nullable().describe("Perpendicularity or angularity tolerance u of ISO 9013, mm"),
+    rz5Um: z.number().min(0).max(2000).nullable().describe("Mean height of the profile Rz5 of ISO 9013, micrometres"),
+    acceptable: z.boolean(),
+    note: z.string().trim().max(2000).default(""),
+  })
+  .check(
+    z.refine((cut) => cut.cutThrough || !cut.acceptable, {
+      path: ["acceptable"],
+      error: "A cut that did not go through cannot be acceptable",
+    }),
+  );
 export type TestCutInput = z.infer<typeof TestCutInput>;
 
 const Iso9013Range = z.union([z.number().int(), z.literal("outside")]).nullable();

@@ -24,7 +24,11 @@ export const applications = pgTable(
     shopId: uuid("shop_id").references(() => shops.id, { onDelete: "set null" }),
   },
   () => [
-    pgPolicy("applications_anyone_applies", { for: "insert", to: web, withCheck: sql`state = 'waiting' and shop_id is null` }),
+    pgPolicy("applications_anyone_applies", {
+      for: "insert",
+      to: web,
+      withCheck: sql`state = 'waiting' and shop_id is null`,
+    }),
     pgPolicy("applications_own", { for: "select", to: web, using: sql`email = ${actorEmail}` }),
     adminMay("applications", "select"),
     adminMay("applications", "update"),

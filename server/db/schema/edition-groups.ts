@@ -1,8 +1,19 @@
 import { sql } from "drizzle-orm";
-import { bigint, doublePrecision, index, integer, jsonb, pgPolicy, pgTable, primaryKey, text, uuid } from "drizzle-orm/pg-core";
+import {
+  bigint,
+  doublePrecision,
+  index,
+  integer,
+  jsonb,
+  pgPolicy,
+  pgTable,
+  primaryKey,
+  text,
+  uuid,
+} from "drizzle-orm/pg-core";
 import { editions } from "./editions.ts";
-import { actorIsAdmin, editionBuilder, web } from "./roles.ts";
 import { material, processGas } from "./recipe-versions.ts";
+import { actorIsAdmin, editionBuilder, web } from "./roles.ts";
 
 const readable = sql`exists (select 1 from editions e where e.id = edition_id and e.state = 'published') or ${actorIsAdmin}`;
 

@@ -1,6 +1,17 @@
 import { sql } from "drizzle-orm";
 import {
-  check, doublePrecision, foreignKey, index, integer, jsonb, pgEnum, pgTable, primaryKey, text, timestamp, uuid,
+  check,
+  doublePrecision,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgEnum,
+  pgTable,
+  primaryKey,
+  text,
+  timestamp,
+  uuid,
 } from "drizzle-orm/pg-core";
 import type { RecipeOrigin } from "../../../shared/contracts/recipes.ts";
 import { materials, processGases, surfaces } from "../../../shared/materials/materials.ts";
@@ -45,8 +56,16 @@ export const recipeVersions = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.recipeId, t.number] }),
-    foreignKey({ name: "recipe_versions_recipe", columns: [t.recipeId, t.shopId], foreignColumns: [recipes.id, recipes.shopId] }).onDelete("cascade"),
-    foreignKey({ name: "recipe_versions_machine", columns: [t.machineId, t.shopId], foreignColumns: [machines.id, machines.shopId] }),
+    foreignKey({
+      name: "recipe_versions_recipe",
+      columns: [t.recipeId, t.shopId],
+      foreignColumns: [recipes.id, recipes.shopId],
+    }).onDelete("cascade"),
+    foreignKey({
+      name: "recipe_versions_machine",
+      columns: [t.machineId, t.shopId],
+      foreignColumns: [machines.id, machines.shopId],
+    }),
     index("recipe_versions_shop").on(t.shopId, t.material, t.thicknessMm),
     index("recipe_versions_machine_id").on(t.machineId),
     check("recipe_versions_thickness", sql`thickness_mm between 0.4 and 50`),
@@ -55,7 +74,10 @@ export const recipeVersions = pgTable(
     check("recipe_versions_pressure", sql`pressure_bar between 2 and 9`),
     check("recipe_versions_feed", sql`feed_mm_min between 50 and 15000`),
     check("recipe_versions_cut_height", sql`cut_height_mm between 0.3 and 10`),
-    check("recipe_versions_pierce_height", sql`pierce_height_mm between 0.5 and 20 and pierce_height_mm >= cut_height_mm`),
+    check(
+      "recipe_versions_pierce_height",
+      sql`pierce_height_mm between 0.5 and 20 and pierce_height_mm >= cut_height_mm`,
+    ),
     check("recipe_versions_pierce_delay", sql`pierce_delay_s between 0 and 10`),
     check("recipe_versions_arc_voltage", sql`arc_voltage_v between 50 and 220`),
     check("recipe_versions_kerf", sql`kerf_width_mm between 0.3 and 6`),

@@ -1,6 +1,18 @@
-import { index, integer, json, jsonb, pgTable, primaryKey, smallint, text, timestamp, uuid, varchar } from "drizzle-orm/pg-core";
 import { sql } from "drizzle-orm";
-import { pgPolicy } from "drizzle-orm/pg-core";
+import {
+  index,
+  integer,
+  json,
+  jsonb,
+  pgPolicy,
+  pgTable,
+  primaryKey,
+  smallint,
+  text,
+  timestamp,
+  uuid,
+  varchar,
+} from "drizzle-orm/pg-core";
 import { actorUserId, web } from "./roles.ts";
 
 /** The layout connect-pg-simple reads and writes. */

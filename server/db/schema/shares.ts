@@ -16,7 +16,11 @@ export const shares = pgTable(
     sharedAt: timestamp("shared_at", { withTimezone: true }).notNull().defaultNow(),
   },
   (t) => [
-    foreignKey({ name: "shares_recipe", columns: [t.recipeId, t.shopId], foreignColumns: [recipes.id, recipes.shopId] }).onDelete("cascade"),
+    foreignKey({
+      name: "shares_recipe",
+      columns: [t.recipeId, t.shopId],
+      foreignColumns: [recipes.id, recipes.shopId],
+    }).onDelete("cascade"),
     index("shares_shop").on(t.shopId),
     ownShopOnly("shares"),
   ],

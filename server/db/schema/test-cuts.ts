@@ -1,5 +1,17 @@
 import { sql } from "drizzle-orm";
-import { boolean, check, doublePrecision, foreignKey, index, integer, pgEnum, pgTable, text, timestamp, uuid } from "drizzle-orm/pg-core";
+import {
+  boolean,
+  check,
+  doublePrecision,
+  foreignKey,
+  index,
+  integer,
+  pgEnum,
+  pgTable,
+  text,
+  timestamp,
+  uuid,
+} from "drizzle-orm/pg-core";
 import { drossAmounts, topEdges } from "../../../shared/contracts/test-cuts.ts";
 import { recipeVersions } from "./recipe-versions.ts";
 import { ownShopOnly } from "./roles.ts";
@@ -29,7 +41,11 @@ export const testCuts = pgTable(
     recordedAt: timestamp("recorded_at", { withTimezone: true }).notNull().defaultNow(),
   },
   (t) => [
-    foreignKey({ name: "test_cuts_version", columns: [t.recipeId, t.versionNumber], foreignColumns: [recipeVersions.recipeId, recipeVersions.number] }).onDelete("cascade"),
+    foreignKey({
+      name: "test_cuts_version",
+      columns: [t.recipeId, t.versionNumber],
+      foreignColumns: [recipeVersions.recipeId, recipeVersions.number],
+    }).onDelete("cascade"),
     index("test_cuts_recipe").on(t.recipeId, t.cutAt),
     index("test_cuts_shop").on(t.shopId, t.cutAt),
     check("test_cuts_bevel", sql`bevel_deg between -45 and 45`),

@@ -1,0 +1,6 @@
+import { Router } from "express";
+import type { Db } from "#server/db/client.ts";
+
+export function editionsRouter(_db: Db): Router {
+  return Router();
+}

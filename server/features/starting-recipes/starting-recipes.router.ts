@@ -1,0 +1,6 @@
+import { Router } from "express";
+import type { Db } from "#server/db/client.ts";
+
+export function startingRecipesRouter(_db: Db): Router {
+  return Router();
+}
