@@ -87,15 +87,23 @@ export function acquireLock(file: string): Lock {
   };
 }
 
-/** Waits for its turn, then runs. For short work only, such as building the web application. */
-export async function withLock<Result>(file: string, work: () => Promise<Result>): Promise<Result> {
+async function waitForLock(file: string): Promise<Lock> {
   for (;;) {
     try {
-      const lock = acquireLock(file);
-      return await work().finally(lock.release);
+      return acquireLock(file);
     } catch (error) {
       if (!(error instanceof AlreadyRunningError)) throw error;
       await delay(200);
     }
+  }
+}
+
+/** Waits for its turn, then runs. For short work only, such as building the web application. */
+export async function withLock<Result>(file: string, work: () => Promise<Result>): Promise<Result> {
+  const lock = await waitForLock(file);
+  try {
+    return await work();
+  } finally {
+    lock.release();
   }
 }

@@ -1,4 +1,4 @@
-import { mkdtempSync, readdirSync, readFileSync, rmSync, writeFileSync } from "node:fs";
+import { chmodSync, mkdtempSync, readdirSync, readFileSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import path from "node:path";
 import { bootstrapDatabase, roles } from "#server/db/bootstrap.ts";
@@ -43,6 +43,7 @@ async function removeLeftovers(): Promise<void> {
 export async function startTestPostgres(): Promise<{ urls: TestPostgres; stop: () => Promise<void> }> {
   await removeLeftovers();
   const folder = mkdtempSync(path.join(tmpdir(), prefix));
+  chmodSync(folder, 0o711); // the database's system user must get through to its own folder below
   writeFileSync(path.join(folder, "run.json"), JSON.stringify(thisProcess()));
   const remove = () => rmSync(folder, { recursive: true, force: true });
   process.once("exit", remove);
