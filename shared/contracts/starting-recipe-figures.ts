@@ -90,7 +90,7 @@ export const StartingRecipe = z.object({
   material: z.enum(materials),
   thicknessMm: z.number(),
   gas: z.enum(processGases),
-  edition: EditionRef.nullable().describe("The edition its peers' figures come from; null where none was published"),
+  edition: EditionRef.nullable().describe("The edition its peers' figures come from; null where it uses none"),
   groupId: z.string().nullable(),
   nozzle: NozzleAdvice,
   setpoints: z.object(setpointsByMetric),

@@ -37,14 +37,62 @@ export interface MetricDefinition {
 }
 
 export const metricDefinitions: Record<Metric, MetricDefinition> = {
-  currentA: { label: "Current", quantity: "current", hard: { min: 10, max: 400 }, soft: { min: 15, max: 200 }, logScale: false },
-  pressureBar: { label: "Gas pressure", quantity: "pressure", hard: { min: 2, max: 9 }, soft: { min: 3.5, max: 7 }, logScale: false },
-  feedMmMin: { label: "Feed rate", quantity: "feed", hard: { min: 50, max: 15_000 }, soft: { min: 150, max: 12_000 }, logScale: true },
-  cutHeightMm: { label: "Cut height", quantity: "length", hard: { min: 0.3, max: 10 }, soft: { min: 0.8, max: 5 }, logScale: false },
-  pierceHeightMm: { label: "Pierce height", quantity: "length", hard: { min: 0.5, max: 20 }, soft: { min: 1.5, max: 10 }, logScale: false },
-  pierceDelayS: { label: "Pierce delay", quantity: "delay", hard: { min: 0, max: 10 }, soft: { min: 0, max: 4 }, logScale: false },
-  arcVoltageV: { label: "Arc voltage", quantity: "voltage", hard: { min: 50, max: 220 }, soft: { min: 70, max: 180 }, logScale: false },
-  kerfWidthMm: { label: "Kerf width", quantity: "length", hard: { min: 0.3, max: 6 }, soft: { min: 0.8, max: 4 }, logScale: true },
+  currentA: {
+    label: "Current",
+    quantity: "current",
+    hard: { min: 10, max: 400 },
+    soft: { min: 15, max: 200 },
+    logScale: false,
+  },
+  pressureBar: {
+    label: "Gas pressure",
+    quantity: "pressure",
+    hard: { min: 2, max: 9 },
+    soft: { min: 3.5, max: 7 },
+    logScale: false,
+  },
+  feedMmMin: {
+    label: "Feed rate",
+    quantity: "feed",
+    hard: { min: 50, max: 15_000 },
+    soft: { min: 150, max: 12_000 },
+    logScale: true,
+  },
+  cutHeightMm: {
+    label: "Cut height",
+    quantity: "length",
+    hard: { min: 0.3, max: 10 },
+    soft: { min: 0.8, max: 5 },
+    logScale: false,
+  },
+  pierceHeightMm: {
+    label: "Pierce height",
+    quantity: "length",
+    hard: { min: 0.5, max: 20 },
+    soft: { min: 1.5, max: 10 },
+    logScale: false,
+  },
+  pierceDelayS: {
+    label: "Pierce delay",
+    quantity: "delay",
+    hard: { min: 0, max: 10 },
+    soft: { min: 0, max: 4 },
+    logScale: false,
+  },
+  arcVoltageV: {
+    label: "Arc voltage",
+    quantity: "voltage",
+    hard: { min: 50, max: 220 },
+    soft: { min: 70, max: 180 },
+    logScale: false,
+  },
+  kerfWidthMm: {
+    label: "Kerf width",
+    quantity: "length",
+    hard: { min: 0.3, max: 6 },
+    soft: { min: 0.8, max: 4 },
+    logScale: true,
+  },
 };
 
 export const thicknessRangeMm: Range = { min: 0.4, max: 50 };

@@ -58,7 +58,7 @@ const forMaterial: Record<Material, Caution[]> = {
       id: "hydrogen",
       title: "Hydrogen over water",
       text: "Hot aluminium makes hydrogen in a water table; it gathers under the plate and explodes. Air the water before and during cutting, clear the dross often, leave no plate lying on it.",
-      standards: ["NFPA 51B"],
+      standards: [],
     },
     {
       id: "metal-dust",
