@@ -47,15 +47,14 @@ export function Dialog({ open, onClose, title, children, actions, wide }: Dialog
         wide ? "max-w-3xl" : "max-w-lg",
       )}
     >
-      <div className="p-5">
-        <div className="mb-3 flex items-start justify-between gap-4">
-          <h2 id={heading} className="text-lg font-bold">
-            {title}
-          </h2>
-          <CloseButton onClick={onClose} />
-        </div>
+      <div className="relative p-5">
+        <h2 id={heading} className="mb-3 pr-10 text-lg font-bold">
+          {title}
+        </h2>
         {children}
         {actions ? <div className="mt-5 flex flex-wrap gap-2">{actions}</div> : null}
+        {/* Last, so that a dialog opens with the focus on what it is about. */}
+        <CloseButton onClick={onClose} />
       </div>
     </dialog>
   );
@@ -67,7 +66,7 @@ function CloseButton({ onClick }: { onClick: () => void }) {
       type="button"
       aria-label="Close"
       onClick={onClick}
-      className="-mt-2 -mr-2 inline-flex size-11 shrink-0 items-center justify-center rounded text-muted hover:bg-sunken hover:text-ink"
+      className="absolute top-2.5 right-2.5 inline-flex size-11 items-center justify-center rounded text-muted hover:bg-sunken hover:text-ink"
     >
       <X aria-hidden="true" size={20} />
     </button>

@@ -29,7 +29,7 @@ export interface FieldProps extends FieldTexts {
 export const controlClasses = classNames(
   "w-full min-h-touch rounded border border-line-strong bg-surface px-3 py-2 text-base text-ink",
   "placeholder:text-muted aria-invalid:border-stop aria-invalid:ring-1 aria-invalid:ring-stop",
-  "disabled:cursor-not-allowed disabled:bg-sunken disabled:text-muted read-only:bg-sunken",
+  "disabled:cursor-not-allowed disabled:bg-sunken disabled:text-muted [&[readonly]]:bg-sunken",
 );
 
 export function FieldError({ id, children }: { id?: string; children: ReactNode }) {

@@ -29,7 +29,7 @@ export function PageHeader({ title, facts, back, actions, documentTitle }: PageH
             {back.label}
           </Link>
         ) : null}
-        <h1 className="text-xl font-black tracking-tight break-words md:text-2xl">{title}</h1>
+        <h1 className="text-xl font-black tracking-[-0.01em] break-words md:text-2xl">{title}</h1>
         {facts ? <p className="mt-1 text-muted">{facts}</p> : null}
       </div>
       {actions ? <div className="flex flex-wrap gap-2 print:hidden">{actions}</div> : null}
