@@ -1,5 +1,5 @@
 import { sql } from "drizzle-orm";
-import { integer, pgEnum, pgPolicy, pgTable, text, timestamp, uuid } from "drizzle-orm/pg-core";
+import { integer, pgEnum, pgPolicy, pgTable, text, timestamp, uniqueIndex, uuid } from "drizzle-orm/pg-core";
 import { editions } from "./editions.ts";
 import { adminMay, editionBuilder } from "./roles.ts";
 import { users } from "./users.ts";
@@ -21,7 +21,9 @@ export const editionBuilds = pgTable(
     startedAt: timestamp("started_at", { withTimezone: true }),
     finishedAt: timestamp("finished_at", { withTimezone: true }),
   },
-  () => [
+  (t) => [
+    // One at a time, whoever asks and however many processes there are.
+    uniqueIndex("edition_builds_one_open").on(sql`(true)`).where(sql`${t.state} in ('queued', 'running')`),
     adminMay("edition_builds", "select"),
     adminMay("edition_builds", "insert"),
     pgPolicy("edition_builds_builder", { for: "all", to: editionBuilder, using: sql`true`, withCheck: sql`true` }),

@@ -1,6 +1,5 @@
 import { sql } from "drizzle-orm";
 import {
-  bigint,
   doublePrecision,
   index,
   integer,
@@ -54,25 +53,5 @@ export const listedRecipes = pgTable(
     index("listed_recipes_group").on(t.editionId, t.groupId),
     pgPolicy("listed_recipes_published", { for: "select", to: web, using: readable }),
     pgPolicy("listed_recipes_builder", { for: "all", to: editionBuilder, using: sql`true`, withCheck: sql`true` }),
-  ],
-);
-
-/**
- * Which contributors stood behind a group's figures when they were last computed, by opaque number and a digest of what
- * they gave: what the three-shop step compares. The builder alone reads it.
- */
-export const editionLedger = pgTable(
-  "edition_ledger",
-  {
-    editionId: uuid("edition_id")
-      .notNull()
-      .references(() => editions.id, { onDelete: "cascade" }),
-    groupId: text("group_id").notNull(),
-    contributor: bigint("contributor", { mode: "number" }).notNull(),
-    digest: text("digest").notNull(),
-  },
-  (t) => [
-    primaryKey({ columns: [t.editionId, t.groupId, t.contributor] }),
-    pgPolicy("edition_ledger_builder", { for: "all", to: editionBuilder, using: sql`true`, withCheck: sql`true` }),
   ],
 );
