@@ -12,7 +12,7 @@ const queries = createQueryClient();
 createRoot(document.querySelector("#root")!).render(
   <StrictMode>
     <QueryClientProvider client={queries}>
-      <RouterProvider router={createRouter(queries)} />
+      <RouterProvider router={createRouter()} />
     </QueryClientProvider>
   </StrictMode>,
 );
