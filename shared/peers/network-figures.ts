@@ -10,8 +10,8 @@ interface Point {
   logMedian: number;
 }
 
-/** Fewest groups beyond one a series: with less, the exponent would follow single medians. */
-const fewestDegreesOfFreedom = 3;
+/** Fewest groups beyond the first of each series: with less, the exponent would follow single medians. */
+const fewestFurtherGroups = 3;
 
 /** The figures about the network as a whole that go with an edition: made from its released groups alone. */
 export function networkFigures(groups: readonly ReleasedGroup[]): NetworkFigures {
@@ -44,7 +44,7 @@ function thicknessExponent(points: readonly Point[]): number | null {
   for (const point of points) series.set(point.series, [...(series.get(point.series) ?? []), point]);
   let across = 0;
   let along = 0;
-  let freedom = -1; // one for the slope
+  let furtherGroups = 0;
   for (const members of series.values()) {
     const meanX = members.reduce((sum, p) => sum + p.logThickness, 0) / members.length;
     const meanY = members.reduce((sum, p) => sum + p.logMedian, 0) / members.length;
@@ -52,7 +52,7 @@ function thicknessExponent(points: readonly Point[]): number | null {
       across += (p.logThickness - meanX) * (p.logMedian - meanY);
       along += (p.logThickness - meanX) ** 2;
     }
-    freedom += members.length - 1;
+    furtherGroups += members.length - 1;
   }
-  return freedom < fewestDegreesOfFreedom - 1 || along === 0 ? null : Math.round((100 * across) / along) / 100 + 0;
+  return furtherGroups < fewestFurtherGroups || along === 0 ? null : Math.round((100 * across) / along) / 100 + 0;
 }

@@ -1,7 +1,7 @@
 import { quantileShares } from "../disclosure/tails.ts";
 import { type Metric, metricDefinitions } from "../recipes/metrics.ts";
-import { formatQuantity } from "../units/format-quantity.ts";
-import type { UnitSystem } from "../units/unit-systems.ts";
+import { formatQuantity } from "../units/format.ts";
+import type { UnitSystem } from "../units/units.ts";
 import type { Standing } from "./standing.ts";
 
 interface Words {
