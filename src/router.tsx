@@ -3,7 +3,11 @@ import { NotFoundPage, ProblemPage } from "./shell/problem-page.tsx";
 import { BareFrame, RootLayout } from "./shell/root-layout.tsx";
 
 /** A page that loads with its route, by the name it is exported under. */
-function page<Name extends string>(path: string, load: () => Promise<Record<Name, React.ComponentType>>, name: Name): RouteObject {
+function page<Name extends string>(
+  path: string,
+  load: () => Promise<Record<Name, React.ComponentType>>,
+  name: Name,
+): RouteObject {
   return { path, lazy: async () => ({ Component: (await load())[name] }) };
 }
 

@@ -50,9 +50,9 @@ const stateStore = {
   },
   verify(req: Request, state: unknown, done: (error: null, context: unknown, info?: unknown) => void): void {
     const pending = takePendingSignIn(req, String(state), Date.now());
-    if (!pending) return done(null, false, { message: "This sign-in has expired or was used before." });
-    signIns.set(req, pending);
-    done(null, { nonce: pending.nonce });
+    if (pending) signIns.set(req, pending);
+    if (pending) done(null, { nonce: pending.nonce });
+    else done(null, false, { message: "This sign-in has expired or was used before." });
   },
 };
 

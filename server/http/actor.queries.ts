@@ -5,19 +5,21 @@ import { shops } from "#server/db/schema/shops.ts";
 import { networkAdmins, users } from "#server/db/schema/users.ts";
 import { type Actor, visitor } from "./actor.ts";
 
-/** Row-level security reads these settings; they end with the transaction. */
+/** Row-level security reads these settings; they end with the transaction. From the first call on, somebody acts. */
 export async function actAs(
   tx: Db,
   settings: Partial<Record<"user_id" | "shop_id" | "email" | "identity" | "admin", string>>,
 ) {
-  const calls = Object.entries(settings).map(([name, value]) => sql`set_config(${`app.${name}`}, ${value}, true)`);
+  const calls = Object.entries({ acting: "yes", ...settings }).map(
+    ([name, value]) => sql`set_config(${`app.${name}`}, ${value}, true)`,
+  );
   await tx.execute(sql`select ${sql.join(calls, sql`, `)}`);
 }
 
 /** Who a signed-in user is, with the transaction set to act for them and their shop. A user since removed is a visitor. */
 export async function becomeActor(tx: Db, userId: string | null): Promise<Actor> {
+  await actAs(tx, { user_id: userId ?? "" });
   if (userId === null) return visitor;
-  await actAs(tx, { user_id: userId });
   const [row] = await tx
     .select({ user: users, admin: networkAdmins.userId, role: memberships.role, shop: shops })
     .from(users)

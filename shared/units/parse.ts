@@ -78,10 +78,17 @@ interface Writing {
   fraction: boolean;
 }
 
-function inStoredUnit(number: number, unitText: string | undefined, { quantity, units, fraction }: Writing): ParsedQuantity {
+function inStoredUnit(
+  number: number,
+  unitText: string | undefined,
+  { quantity, units, fraction }: Writing,
+): ParsedQuantity {
   const isLength = quantity === "length" || quantity === "thickness" || quantity === "nozzle";
   if (unitText === undefined) {
-    return { ok: true, value: fraction && isLength ? number * mmPerInch : number * memberUnits[quantity][units].factor };
+    return {
+      ok: true,
+      value: fraction && isLength ? number * mmPerInch : number * memberUnits[quantity][units].factor,
+    };
   }
   const spelled = unitText.replace(/[\s.]/g, "").replace(/per/g, "/");
   const unit = unitSpellings[spelled] ?? spelled;
@@ -89,5 +96,7 @@ function inStoredUnit(number: number, unitText: string | undefined, { quantity, 
   if (factor !== undefined) return { ok: true, value: number * factor };
   const known = Object.values(typedUnits).some((table) => unit in table);
   const wanted = `Type it like ${examples[quantity][units]}`;
-  return refuse(known ? `${unitText.trim()} measures something else. ${wanted}` : `Unknown unit ${unitText.trim()}. ${wanted}`);
+  return refuse(
+    known ? `${unitText.trim()} measures something else. ${wanted}` : `Unknown unit ${unitText.trim()}. ${wanted}`,
+  );
 }

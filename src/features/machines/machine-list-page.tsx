@@ -16,7 +16,12 @@ export function MachineListPage() {
   const feed = (machine: Machine) => formatQuantity(machine.topFeedMmMin, "feed", units);
 
   const columns: Column<Machine>[] = [
-    { key: "name", header: "Machine", rowHeader: true, cell: (m) => <TextLink to={`/machines/${m.id}`}>{m.name}</TextLink> },
+    {
+      key: "name",
+      header: "Machine",
+      rowHeader: true,
+      cell: (m) => <TextLink to={`/machines/${m.id}`}>{m.name}</TextLink>,
+    },
     { key: "current", header: "Up to", unit: "A", numeric: true, cell: (m) => m.powerSourceMaxCurrentA },
     { key: "feed", header: "Top feed", unit: feedUnit(units), numeric: true, cell: (m) => feed(m).text },
     { key: "height", header: "Height control", cell: (m) => heightControlLabels[m.heightControl] },
