@@ -46,6 +46,15 @@ async function readForm(request: http.IncomingMessage): Promise<URLSearchParams>
   return new URLSearchParams(body);
 }
 
+/** Changing from one person to another would need the provider's own page with a script: forget the first beforehand. */
+async function forgetPerson(provider: Provider, sessionUid: string | undefined): Promise<void> {
+  const session = sessionUid ? await provider.Session.findByUid(sessionUid) : undefined;
+  if (!session) return;
+  session.accountId = undefined;
+  session.authorizations = {};
+  await session.persist();
+}
+
 /** The chooser: shown on GET, answered by POST. */
 async function interact(
   provider: Provider,
@@ -54,10 +63,11 @@ async function interact(
   response: http.ServerResponse,
 ): Promise<void> {
   try {
-    await provider.interactionDetails(request, response);
+    const { session } = await provider.interactionDetails(request, response);
     if (request.method !== "POST") return send(response, 200, "text/html", chooserPage(accounts));
     const sub = (await readForm(request)).get("sub");
     const known = accounts.find((account) => account.sub === sub);
+    if (known && session?.accountId !== known.sub) await forgetPerson(provider, session?.uid);
     const result = known
       ? { login: { accountId: known.sub } }
       : { error: "access_denied", error_description: "Sign-in was cancelled" };

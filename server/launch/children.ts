@@ -11,6 +11,8 @@ export interface ChildOptions {
   logFolder: string;
   /** Also show what it says, line by line. */
   show?: (line: string) => void;
+  /** Milliseconds it gets to finish what it is doing when stopped. */
+  patience?: number;
 }
 
 export interface Child {
@@ -24,8 +26,6 @@ export interface Child {
 }
 
 const keptLines = 20;
-/** Milliseconds a child gets to finish what it is doing. */
-const patience = 8000;
 const stopWithParent = new URL("./stop-with-parent.ts", import.meta.url).href;
 
 /** Everything said goes to a log file; the last lines are kept at hand. */
@@ -85,7 +85,7 @@ export function startChild(options: ChildOptions): Child {
     stop: async () => {
       if (over || child.pid === undefined) return;
       child.kill("SIGTERM");
-      const impatience = setTimeout(() => signalGroup(child, "SIGKILL"), patience);
+      const impatience = setTimeout(() => signalGroup(child, "SIGKILL"), options.patience ?? 8000);
       await ended;
       clearTimeout(impatience);
     },

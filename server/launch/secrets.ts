@@ -11,8 +11,12 @@ export const Secrets = z.object({
   owner: Secret,
   web: Secret,
   editionBuilder: Secret,
+  /** Keys the digests of what editions were built from: never changes, or the next edition cannot be compared. */
+  editionMarks: Secret,
   session: Secret,
   oidcClient: Secret,
+  /** Ties a shop to its mark in published editions: a new one would break that tie. */
+  editionMarks: Secret,
 });
 export type Secrets = z.infer<typeof Secrets>;
 
@@ -23,8 +27,10 @@ export function generateSecrets(): Secrets {
     owner: secret(),
     web: secret(),
     editionBuilder: secret(),
+    editionMarks: secret(),
     session: secret(),
     oidcClient: secret(),
+    editionMarks: secret(),
   };
 }
 
@@ -35,8 +41,12 @@ export function writePrivateFile(file: string, content: string): void {
   renameSync(draft, file);
 }
 
+/** Makes what is missing, be it all of it or one that a newer version needs; never replaces one. */
 export function loadSecrets(folder: string): Secrets {
   const file = path.join(folder, "secrets.json");
-  if (!existsSync(file)) writePrivateFile(file, `${JSON.stringify(generateSecrets(), null, 2)}\n`);
-  return Secrets.parse(JSON.parse(readFileSync(file, "utf8")));
+  const known: unknown = existsSync(file) ? JSON.parse(readFileSync(file, "utf8")) : {};
+  const secrets = Secrets.parse({ ...generateSecrets(), ...Secrets.partial().parse(known) });
+  if (JSON.stringify(secrets) !== JSON.stringify(known))
+    writePrivateFile(file, `${JSON.stringify(secrets, null, 2)}\n`);
+  return secrets;
 }

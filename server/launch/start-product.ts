@@ -7,7 +7,7 @@ import type { StartOptions } from "./options.ts";
 import { type ReservedPort, reservePort } from "./ports.ts";
 import { type PostgresServer, startPostgres } from "./postgres.ts";
 import type { Running } from "./running.ts";
-import { loadSecrets, type Secrets } from "./secrets.ts";
+import { loadSecrets, type Secrets, writePrivateFile } from "./secrets.ts";
 import { waitUntilAnswering } from "./wait-for.ts";
 import { ensureWebBuild, viteProgram, webFolder } from "./web-build.ts";
 
@@ -46,6 +46,8 @@ function makeEnvironment(postgres: PostgresServer, secrets: Secrets, ports: Port
     PUBLIC_URL: `http://127.0.0.1:${ports.web.port}`,
     DATABASE_URL: postgres.urlFor(roles.web, secrets.web, database),
     EDITION_DATABASE_URL: postgres.urlFor(roles.editionBuilder, secrets.editionBuilder, database),
+    EDITION_MARKS_KEY: secrets.editionMarks,
+    EDITION_MARKS_KEY: secrets.editionMarks,
     OIDC_ISSUER: `http://127.0.0.1:${ports.signIn.port}`,
     OIDC_CLIENT_ID: "tempermark",
     OIDC_CLIENT_SECRET: secrets.oidcClient,
@@ -54,6 +56,12 @@ function makeEnvironment(postgres: PostgresServer, secrets: Secrets, ports: Port
     WEB_DIR: webFolder,
     DEMO: "1",
   };
+}
+
+/** For commands given beside the running product, such as `npm run edition`. */
+function leaveForCommands(folder: string, { EDITION_DATABASE_URL, EDITION_MARKS_KEY }: NodeJS.ProcessEnv): void {
+  const settings = { EDITION_DATABASE_URL, EDITION_MARKS_KEY };
+  writePrivateFile(path.join(folder, "environment.json"), `${JSON.stringify(settings, null, 2)}\n`);
 }
 
 async function prepareDatabase(postgres: PostgresServer, secrets: Secrets, say: Say): Promise<void> {
@@ -156,6 +164,7 @@ export async function startProduct(
   await prepareDatabase(postgres, secrets, say);
   const ports = await reservePorts(options);
   const env = makeEnvironment(postgres, secrets, ports);
+  leaveForCommands(folder, env);
   const launcher = new Launcher(running, { logFolder, env, ...(options.dev ? { show: say } : {}) });
   launcher.watchPostgres(postgres);
   if (options.seed) await fillWithDemo(launcher, postgres, secrets, say);

@@ -39,7 +39,8 @@ async function start(options: StartOptions): Promise<void> {
       void end(1);
     });
     lock.announce(product.address);
-    say(welcome(product.address, path.relative(process.cwd(), product.logFolder) || product.logFolder));
+    const logFolder = path.relative(process.cwd(), product.logFolder);
+    say(welcome(product.address, logFolder.startsWith("..") ? product.logFolder : logFolder));
   } catch (error) {
     if (!(error instanceof StoppedError) && !running.isEnding) console.error((error as Error).message);
     await end(1);

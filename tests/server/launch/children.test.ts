@@ -15,7 +15,7 @@ afterAll(async () => {
 function runScript(name: string, code: string): Child {
   const file = path.join(folder, `${name}.ts`);
   writeFileSync(file, code);
-  const child = startChild({ name, file, env: { ...process.env }, logFolder: folder });
+  const child = startChild({ name, file, env: { ...process.env }, logFolder: folder, patience: 1000 });
   started.push(child);
   return child;
 }
@@ -43,7 +43,7 @@ test("stops a child by asking first", async () => {
   expect(child.lastLines()).toContain("goodbye");
 });
 
-test("ends a child that does not listen", { timeout: 20_000 }, async () => {
+test("ends a child that does not listen", async () => {
   const child = runScript("deaf", 'process.on("SIGTERM", () => {}); setInterval(() => {}, 1000); console.log("up");');
   await waitForLine(child);
   await child.stop();

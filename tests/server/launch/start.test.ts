@@ -73,7 +73,7 @@ test("passwords are readable by their owner alone and are printed nowhere", () =
   const file = path.join(folder, "secrets.json");
   expect(statSync(file).mode & 0o777).toBe(0o600);
   const secrets = Object.values<string>(JSON.parse(readFileSync(file, "utf8")));
-  expect(new Set(secrets).size).toBe(6);
+  expect(new Set(secrets).size).toBe(7);
   const logs = ["api", "worker", "sign-in"].map((name) =>
     readFileSync(path.join(folder, "logs", `${name}.log`), "utf8"),
   );
