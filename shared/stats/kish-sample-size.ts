@@ -9,7 +9,7 @@ import { requireWeights } from "./require-weights.ts";
  * @param weights  length n >= 1, unitless, finite, each >= 0, at least one > 0
  * @returns unitless, in [1, n]; n when all weights are equal
  * @throws RangeError when an input breaks its line above
- * @see Kish (1965), Survey Sampling, Wiley, section 11.7; Akinshin (2023), arXiv:2304.07265, section 2
+ * @see Kish (1965), Survey Sampling, Wiley; Akinshin (2023), arXiv:2304.07265
  */
 export function kishSampleSize(weights: ArrayLike<number>): number {
   const largest = requireWeights(weights, "kishSampleSize");

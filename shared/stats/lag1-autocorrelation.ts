@@ -11,7 +11,7 @@ import { requireThat } from "./require-that.ts";
  * @param values  length n >= 2, in order of time, finite, all in one unit, not all equal
  * @returns unitless, in (-1, 1)
  * @throws RangeError when an input breaks its line above
- * @see NIST/SEMATECH e-Handbook of Statistical Methods, 1.3.5.12; Box and Jenkins (1976), Time Series Analysis, section 2.1.5
+ * @see NIST/SEMATECH e-Handbook of Statistical Methods, 1.3.5.12; Box and Jenkins (1976), Time Series Analysis
  */
 export function lag1Autocorrelation(values: readonly number[]): number {
   requireSample(values, "lag1Autocorrelation", 2);

@@ -39,7 +39,7 @@ export function linearFit(rows: readonly (readonly number[])[], y: readonly numb
   const scales = scalesOf(rows, count);
   const columns = scales.map((scale, j) => Float64Array.from(rows, (row) => row[j]! / scale));
   const qr = decomposeQr(columns);
-  const smallest = Number.EPSILON * rows.length;
+  const smallest = Number.EPSILON * Math.max(64, rows.length); // columns have length about 1; rounding leaves a few EPSILON
   requireThat(
     qr.r.every((row, k) => Math.abs(row[k]!) > smallest),
     "linearFit needs regressors of which none is a combination of the others",

@@ -33,7 +33,7 @@ const LARGEST_POWER = 60;
  * @returns see RandomIntercepts; betweenVariance is 0 where groups differ no more than chance would have them
  * @throws RangeError when an input breaks its line above
  * @see Patterson and Thompson (1971), Biometrika 58(3), 545-554; Searle, Casella and McCulloch (1992), Variance
- *      Components, Wiley, sections 3.8 and 7.4
+ *      Components, Wiley
  */
 export function randomIntercepts(groups: readonly (readonly number[])[]): RandomIntercepts {
   requireThat(groups.length >= 2, "randomIntercepts needs at least two groups");

@@ -11,7 +11,7 @@ import { requireSample } from "./require-sample.ts";
  * @param values  length n >= 2, finite, all in one unit
  * @returns in the unit of values, >= 0; 0 when all are equal
  * @throws RangeError when an input breaks its line above
- * @see Chan, Golub and LeVeque (1983), The American Statistician 37(3), 242-247, eq. 1.7
+ * @see Chan, Golub and LeVeque (1983), The American Statistician 37(3), 242-247
  */
 export function standardDeviation(values: readonly number[]): number {
   requireSample(values, "standardDeviation", 2);

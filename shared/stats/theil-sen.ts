@@ -24,7 +24,7 @@ export type TheilSen = { slope: number; intercept: number; lower: number; upper:
  * @returns see TheilSen; lower <= slope <= upper
  * @throws RangeError when an input breaks its line above
  * @see Sen (1968), Journal of the American Statistical Association 63(324), 1379-1389; intercept after Conover (1999),
- *      Practical Nonparametric Statistics, 3rd ed., section 5.5
+ *      Practical Nonparametric Statistics, 3rd ed.
  */
 export function theilSen(x: readonly number[], y: readonly number[], confidence = 0.95): TheilSen {
   requireThat(x.length === y.length, "theilSen needs one y for each x");

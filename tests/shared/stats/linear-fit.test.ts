@@ -70,6 +70,27 @@ test("leaves residuals that no regressor can explain, and carries the units of x
   );
 });
 
+test("refuses regressors that add up to another, whatever rounding leaves of them", () => {
+  const rows = fc.array(
+    fc.tuple(fc.double({ min: -9, max: 9, noNaN: true }), fc.double({ min: -9, max: 9, noNaN: true })),
+    {
+      minLength: 5,
+      maxLength: 40,
+    },
+  );
+  fc.assert(
+    fc.property(rows, fc.double({ min: 0.1, max: 3, noNaN: true }), (pairs, factor) => {
+      const design = pairs.map(([a, b]) => [1, a, b, 1 + a + factor * b]);
+      expect(() =>
+        linearFit(
+          design,
+          pairs.map((_, i) => i),
+        ),
+      ).toThrow(RangeError);
+    }),
+  );
+});
+
 test("has no doubt about an exact line", () => {
   const fit = linearFit(
     [1, 2, 3, 4].map((x) => [1, x]),

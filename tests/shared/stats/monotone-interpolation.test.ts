@@ -2,13 +2,31 @@ import fc from "fast-check";
 import { expect, test } from "vitest";
 import { monotoneInterpolation } from "#shared/stats/monotone-interpolation.ts";
 
-// Fritsch and Carlson (1980), section 4, worked by hand. Secants 1 and 9, starting slopes 1, 5, 9: in the first interval
+// Fritsch and Carlson (1980), worked by hand. Secants 1 and 9, starting slopes 1, 5, 9: in the first interval
 // (alpha, beta) = (1, 5) is outside the monotone region, so both shrink by 3 / sqrt(26). Its middle then lies at
 // (0 + 1) / 2 + (3 / sqrt(26) - 15 / sqrt(26)) / 8; the second interval keeps 15 / sqrt(26) and 9.
-test("shrinks overshooting slopes as Fritsch and Carlson's step 2B gives by hand", () => {
+test("shrinks overshooting slopes as Fritsch and Carlson prescribe", () => {
   const curve = monotoneInterpolation([0, 1, 2], [0, 1, 10]);
   expect(curve(0.5)).toBeCloseTo(0.5 - 1.5 / Math.sqrt(26), 14);
   expect(curve(1.5)).toBeCloseTo(5.5 + (15 / Math.sqrt(26) - 9) / 8, 14);
+});
+
+// Secants 2, 1 and 0.01. The middle interval's (1.5, 0.505) is steep at one end only and inside the monotone region, so
+// its first slope stays; the last interval's (50.5, 1) is not, which turns the knot before it to 0.03 * 0.505 / hypot.
+test("leaves slopes alone that are inside the monotone region", () => {
+  const curve = monotoneInterpolation([0, 1, 2, 3], [0, 2, 3, 3.01]);
+  const third = (0.03 * 0.505) / Math.hypot(0.505, 0.01);
+  expect(curve(1.5)).toBeCloseTo(2.5 + (1.5 - third) / 8, 13);
+});
+
+test("turns exactly at a knot where the data turn", () => {
+  const curve = monotoneInterpolation([0, 1, 3, 4], [0, 2, 1, 5]);
+  for (const away of [1e-3, 0.1, 0.5]) {
+    expect(curve(1 - away)).toBeLessThan(2);
+    expect(curve(1 + away)).toBeLessThan(2);
+  }
+  expect((curve(1.001) - 2) / 0.001).toBeCloseTo(0, 2); // level there: slopes 0 and 0 over the middle interval
+  expect(curve(2)).toBeCloseTo(1.5, 14);
 });
 
 test("mirrors when the data fall, and when read from the other end", () => {

@@ -12,6 +12,13 @@ test.each(Object.entries(reference.cases))("gives the line and interval of %s", 
   expect(line.upper).toBeCloseTo(set.slope_hi95, 12);
 });
 
+// scipy 1.17.1 stats.theilslopes of invented, tied data; without the correction for ties the lower limit would be 1/3.
+test("narrows the interval by what tied values cannot contribute", () => {
+  const x = [1, 1, 2, 2, 3, 3, 4, 4, 5, 5, 6, 6, 7, 7, 8, 8];
+  const y = [3, 0, 5, -2, -1, 0, 1, 2, 7, 2, 6, 4, 5, 3, 9, 6];
+  expect(theilSen(x, y)).toEqual({ slope: 1, intercept: -1.5, lower: 3 / 7, upper: 1.5 });
+});
+
 const points = fc.array(fc.tuple(fc.integer({ min: 0, max: 30 }), fc.double({ min: -50, max: 50, noNaN: true })), {
   minLength: 3,
   maxLength: 25,
