@@ -14,7 +14,7 @@ export function FormProblem({ problem }: { problem: ApiProblem | undefined }) {
       {problem.errors.map((error) => (
         <p key={error.pointer}>{error.detail}</p>
       ))}
-      {problem.passing ? <p>Nothing was saved. What you typed is still here: send it again in a moment.</p> : null}
+      {problem.passing ? <p>Nothing was lost: what you typed is still here. Send it again in a moment.</p> : null}
       {problem.requestId && problem.status >= 500 ? (
         <p className="text-sm text-soft">Request {problem.requestId}</p>
       ) : null}

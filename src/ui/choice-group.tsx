@@ -1,6 +1,6 @@
 import { type ComponentProps, useId } from "react";
 import { classNames } from "./class-names.ts";
-import { FieldError, type FieldTexts } from "./field.tsx";
+import { FieldError, type FieldTexts, Optional } from "./field.tsx";
 import type { Choice } from "./select-field.tsx";
 
 const boxClasses = "size-5 shrink-0 accent-action mt-0.5";
@@ -65,7 +65,7 @@ export function ChoiceGroup({
     <fieldset aria-describedby={described || undefined} className={classNames("space-y-1", className)}>
       <legend className="font-bold">
         {label}
-        {optional ? <span className="font-normal text-muted"> (optional)</span> : null}
+        {optional ? <Optional /> : null}
       </legend>
       {hint ? (
         <p id={`${id}-hint`} className="text-sm text-muted">

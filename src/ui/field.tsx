@@ -41,6 +41,15 @@ export function FieldError({ id, children }: { id?: string; children: ReactNode 
   );
 }
 
+export function Optional() {
+  return (
+    <>
+      {" "}
+      <span className="font-normal text-muted">(optional)</span>
+    </>
+  );
+}
+
 /** Label above, control, then what is wrong or what to know. */
 export function Field({ label, hint, error, optional, className, note, children }: FieldProps) {
   const id = useId();
@@ -51,7 +60,7 @@ export function Field({ label, hint, error, optional, className, note, children 
     <div className={classNames("space-y-1", className)}>
       <label htmlFor={id} className="block text-base font-bold">
         {label}
-        {optional ? <span className="font-normal text-muted"> (optional)</span> : null}
+        {optional ? <Optional /> : null}
       </label>
       {hint ? (
         <p id={ids.hint} className="text-sm text-muted">
