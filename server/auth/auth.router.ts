@@ -1,9 +1,8 @@
-import { type Request, type Response, Router } from "express";
+import { type NextFunction, type Request, type Response, Router } from "express";
 import { Passport, type Strategy } from "passport";
-import type { Db } from "#server/db/client.ts";
-import { ProblemError } from "../http/problem.ts";
-import { providerDiscovery } from "./provider.ts";
-import { findOrMakeUser } from "./sign-in.service.ts";
+import { type Db, isDatabaseUnavailable } from "#server/db/client.ts";
+import { isProviderAway, providerDiscovery } from "./provider.ts";
+import { findOrMakeUser, SignInRefused } from "./sign-in.service.ts";
 import { makeStrategy, type SignedIn } from "./strategy.ts";
 
 export interface SignInSettings {
@@ -13,6 +12,19 @@ export interface SignInSettings {
   providerName: string;
   clientId: string;
   clientSecret: string;
+}
+
+/** What the start page is told, in `?sign-in=`, of a sign-in that came to nothing. */
+type Outcome = "unavailable" | "cancelled" | "expired" | "failed" | SignInRefused["reason"];
+
+function giveUp(req: Request, res: Response, outcome: Outcome, error?: unknown): void {
+  req.log.warn({ err: error, outcome }, "nobody signed in");
+  res.redirect(`/?sign-in=${outcome}`);
+}
+
+function outcomeOf(error: unknown): Outcome {
+  if (error instanceof SignInRefused) return error.reason;
+  return isProviderAway(error) || isDatabaseUnavailable(error) ? "unavailable" : "failed";
 }
 
 /** The browser's way through sign-in, and what sign-out needs to end the provider's session too. */
@@ -36,27 +48,31 @@ export function signIn(db: Db, settings: SignInSettings) {
     ready = true;
   };
 
-  const router = Router();
-  router.get("/auth/sign-in", async (req, res, next) => {
+  const run = async (req: Request, res: Response, next: NextFunction) => {
+    res.set("Cache-Control", "no-store");
     try {
       await prepare();
     } catch (error) {
-      if (error instanceof ProblemError) return res.redirect("/?sign-in=unavailable");
-      throw error;
+      return giveUp(req, res, outcomeOf(error), error);
     }
-    passport.authenticate("oidc")(req, res, next);
-  });
-  router.get("/auth/callback", async (req, res, next) => {
-    // A second tab that finishes after the first: already in, nothing to do.
-    if (req.user) return res.redirect("/");
-    await prepare();
     passport.authenticate("oidc", (error: unknown, user: SignedIn | false) => {
-      if (error || !user) {
-        req.log.warn({ err: error ?? undefined }, "sign-in refused");
-        return res.redirect(error ? "/?sign-in=failed" : "/?sign-in=cancelled");
-      }
+      if (error) return giveUp(req, res, outcomeOf(error), error);
+      if (!user) return giveUp(req, res, req.query.error ? "cancelled" : "expired");
       finishSignIn(req, res, user).catch(next);
     })(req, res, next);
+  };
+
+  const router = Router();
+  router.get("/auth/sign-in", (req, res, next) => {
+    // The strategy tells beginning from finishing by these alone.
+    if (req.query.code !== undefined || req.query.error !== undefined) return giveUp(req, res, "failed");
+    return run(req, res, next);
+  });
+  router.get("/auth/callback", (req, res, next) => {
+    // A second tab that finishes after the first: already in, nothing to do.
+    if (req.user) return res.redirect("/");
+    if (!req.query.code && !req.query.error) return giveUp(req, res, "failed");
+    return run(req, res, next);
   });
 
   const endSessionUrl = async (idToken: string | undefined): Promise<string> => {

@@ -33,3 +33,14 @@ export function providerDiscovery(issuer: string): () => Promise<Discovery> {
     }
   };
 }
+
+/** Whether a sign-in broke off because the provider did not answer, in whichever library's words. */
+export function isProviderAway(error: unknown): boolean {
+  if (error instanceof ProblemError) return error.problem === "sign-in-unavailable";
+  if (typeof error !== "object" || error === null) return false;
+  const { code, statusCode, cause, oauthError } = error as Record<string, unknown>;
+  if (typeof statusCode === "number") return statusCode >= 500;
+  const network = /^(E(CONN|TIMEDOUT|PIPE|HOSTUNREACH|NETUNREACH|NOTFOUND|AI_AGAIN)|UND_ERR_|ERR_JWKS_TIMEOUT)/;
+  if (typeof code === "string" && network.test(code)) return true;
+  return isProviderAway(oauthError ?? cause);
+}

@@ -14,22 +14,23 @@ export async function findUserByIdentity(tx: Db, provider: string, subject: stri
   return row;
 }
 
-/** A person known by e-mail alone, who has never signed in. */
-export async function findUserNeverSignedIn(tx: Db, email: string): Promise<UserRow | undefined> {
+/** Gives a person known by e-mail alone, who has never signed in, to whoever signs in with that address first. */
+export async function bindPreparedUser(
+  tx: Db,
+  { email, ...identity }: { provider: string; subject: string; email: string; name: string },
+): Promise<UserRow | undefined> {
   const [row] = await tx
-    .select()
-    .from(users)
-    .where(and(eq(users.email, email), isNull(users.subject)));
+    .update(users)
+    .set(identity)
+    .where(and(eq(users.email, email), isNull(users.subject)))
+    .returning();
   return row;
 }
 
-export async function bindIdentity(tx: Db, id: string, provider: string, subject: string, name: string): Promise<void> {
-  await tx.update(users).set({ provider, subject, name }).where(eq(users.id, id));
-}
-
-export async function insertUser(tx: Db, values: typeof users.$inferInsert): Promise<UserRow> {
-  const [row] = await tx.insert(users).values(values).returning();
-  return row!; // INSERT ... RETURNING of one row gives one row
+/** Undefined when the identity or the e-mail address is taken. */
+export async function insertUser(tx: Db, values: typeof users.$inferInsert): Promise<UserRow | undefined> {
+  const [row] = await tx.insert(users).values(values).onConflictDoNothing().returning();
+  return row;
 }
 
 /** Makes the person a member where they are none yet and an open invitation waits for their e-mail. */

@@ -26,7 +26,22 @@ export function openDatabase(url: string, options: { max?: number; statementTime
   });
   // A server that goes away ends idle connections too; the next request opens new ones.
   pool.on("error", () => {});
-  return { db: drizzle(pool), pool, close: () => pool.end() };
+  // The same for one that is lent out and idle between two statements: the next statement on it fails and says so.
+  pool.on("connect", (client) => client.on("error", () => {}));
+  return { db: withOwnTransactions(pool), pool, close: () => pool.end() };
+}
+
+/** Drizzle's own transaction never gives a connection back on which `begin` failed: ten of them would empty the pool. */
+function withOwnTransactions(pool: pg.Pool): Db {
+  const transaction: Db["transaction"] = async (work, config) => {
+    const client = await pool.connect();
+    try {
+      return await drizzle(client).transaction(work, config);
+    } finally {
+      client.release();
+    }
+  };
+  return Object.assign(drizzle(pool), { transaction });
 }
 
 const unavailable = new Set([
@@ -34,6 +49,10 @@ const unavailable = new Set([
   "ECONNRESET",
   "EPIPE",
   "ETIMEDOUT",
+  "EHOSTUNREACH",
+  "ENETUNREACH",
+  "ENOTFOUND",
+  "EAI_AGAIN",
   "57P01",
   "57P02",
   "57P03",
@@ -51,7 +70,7 @@ export function databaseError(error: unknown): { code?: string; constraint?: str
     if (typeof code === "string") {
       return { code, message: inner.message, ...(typeof constraint === "string" && { constraint }) };
     }
-    if (/Connection terminated|timeout exceeded when trying to connect/.test(inner.message)) {
+    if (/Connection terminated|timeout exceeded when trying to connect|is not queryable/.test(inner.message)) {
       return { code: "08006", message: inner.message };
     }
   }

@@ -12,9 +12,18 @@ const place: Record<SortKeyType, z.ZodType<string>> = {
   uuid: z.uuid(),
 };
 
-/** `list` names the list and its order: a cursor of another one does not fit. */
-export function writeCursor(list: string, texts: readonly string[]): string {
-  return Buffer.from(JSON.stringify([list, ...texts])).toString("base64url");
+/**
+ * One page of rows asked for with one row more than fits: that row tells whether another page follows.
+ * `list` names the list and its order: a cursor of another one does not fit.
+ */
+export function takePage<Row extends { place: string[] }>(
+  rows: readonly Row[],
+  limit: number,
+  list: string,
+): { shown: Row[]; next: string | null } {
+  const shown = rows.slice(0, limit);
+  const last = rows.length > limit ? shown.at(-1) : undefined;
+  return { shown, next: last ? Buffer.from(JSON.stringify([list, ...last.place])).toString("base64url") : null };
 }
 
 /** The place a page starts after; undefined for the first page. */

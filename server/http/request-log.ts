@@ -32,8 +32,13 @@ export function requestLog(logger: pino.Logger): RequestHandler {
   });
 }
 
-/** A database error's message quotes the statement and its values; the cause alone does not. */
+/**
+ * Drizzle's message quotes the statement and its values; its cause, PostgreSQL's own, does so only for data it cannot
+ * read (class 22). A reader that fails quotes what it read.
+ */
 function messageWithoutValues(error: Error): string {
-  const inner = error.cause instanceof Error ? error.cause : error;
+  const inner = (error.cause instanceof Error ? error.cause : error) as Error & { code?: unknown };
+  if (typeof inner.code === "string" && /^22...$/.test(inner.code)) return `PostgreSQL refused a value (${inner.code})`;
+  if (inner instanceof SyntaxError) return "text that is no JSON";
   return inner.message.split("\n")[0] ?? "";
 }

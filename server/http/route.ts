@@ -79,6 +79,10 @@ function parseRequest<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodT
 ) {
   const params = endpoint.params.safeParse(req.params);
   if (!params.success) throw new ProblemError("not-found");
+  // express.json leaves any other body unread, which would pass for an empty one; `is` gives null where there is none.
+  if (req.is("application/json") === false) {
+    throw new ProblemError("invalid-request", { detail: "Send the body as application/json" });
+  }
   return {
     params: params.data,
     query: parsePart(endpoint.query, "query", req.query, actor.units),

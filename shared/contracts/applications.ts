@@ -5,7 +5,7 @@ export const ApplicationInput = z.object({
   shopName: z.string().trim().min(2, "Give the shop's name").max(80),
   place: z.string().trim().min(2, "Say where the shop is").max(80),
   contactName: z.string().trim().min(2, "Say who you are").max(80),
-  email: z.email("Give an e-mail address such as name@shop.example").trim().max(254),
+  email: z.string().trim().toLowerCase().max(254).pipe(z.email("Give an e-mail address such as name@shop.example")),
   machines: z.number().int().min(1, "At least one plasma table is needed").max(99),
   about: z.string().trim().min(10, "A line or two on what you cut").max(2000),
 });

@@ -1,5 +1,5 @@
 import { sql } from "drizzle-orm";
-import { integer, pgEnum, pgPolicy, pgTable, text, timestamp, uuid } from "drizzle-orm/pg-core";
+import { check, integer, pgEnum, pgPolicy, pgTable, text, timestamp, uniqueIndex, uuid } from "drizzle-orm/pg-core";
 import { actorEmail, adminMay, web } from "./roles.ts";
 import { shops } from "./shops.ts";
 import { users } from "./users.ts";
@@ -23,11 +23,13 @@ export const applications = pgTable(
     decidedBy: uuid("decided_by").references(() => users.id, { onDelete: "set null" }),
     shopId: uuid("shop_id").references(() => shops.id, { onDelete: "set null" }),
   },
-  () => [
+  (t) => [
+    uniqueIndex("applications_waiting_email").on(t.email).where(sql`state = 'waiting'`),
+    check("applications_email_lower", sql`email = lower(email)`),
     pgPolicy("applications_anyone_applies", {
       for: "insert",
       to: web,
-      withCheck: sql`state = 'waiting' and shop_id is null`,
+      withCheck: sql`state = 'waiting' and reason = '' and decided_at is null and decided_by is null and shop_id is null`,
     }),
     pgPolicy("applications_own", { for: "select", to: web, using: sql`email = ${actorEmail}` }),
     adminMay("applications", "select"),

@@ -1,15 +1,5 @@
 import { sql } from "drizzle-orm";
-import {
-  doublePrecision,
-  index,
-  integer,
-  jsonb,
-  pgPolicy,
-  pgTable,
-  primaryKey,
-  text,
-  uuid,
-} from "drizzle-orm/pg-core";
+import { doublePrecision, index, integer, jsonb, pgPolicy, pgTable, primaryKey, text, uuid } from "drizzle-orm/pg-core";
 import { editions } from "./editions.ts";
 import { material, processGas } from "./recipe-versions.ts";
 import { actorIsAdmin, editionBuilder, web } from "./roles.ts";

@@ -1,5 +1,5 @@
 import { sql } from "drizzle-orm";
-import { index, pgPolicy, pgTable, text, timestamp, uuid } from "drizzle-orm/pg-core";
+import { check, index, pgPolicy, pgTable, text, timestamp, uuid } from "drizzle-orm/pg-core";
 import { memberRole } from "./memberships.ts";
 import { actorEmail, adminMay, web } from "./roles.ts";
 import { shops } from "./shops.ts";
@@ -19,12 +19,14 @@ export const invitations = pgTable(
   },
   (t) => [
     index("invitations_email").on(t.email),
+    check("invitations_email_lower", sql`email = lower(email)`),
     pgPolicy("invitations_to_me", { for: "select", to: web, using: sql`email = ${actorEmail}` }),
+    // Accepted once, never opened again.
     pgPolicy("invitations_accept", {
       for: "update",
       to: web,
-      using: sql`email = ${actorEmail}`,
-      withCheck: sql`email = ${actorEmail}`,
+      using: sql`email = ${actorEmail} and accepted_at is null`,
+      withCheck: sql`email = ${actorEmail} and accepted_at is not null`,
     }),
     adminMay("invitations", "insert"),
   ],

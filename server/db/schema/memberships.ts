@@ -1,6 +1,6 @@
 import { sql } from "drizzle-orm";
 import { index, pgEnum, pgPolicy, pgTable, timestamp, uuid } from "drizzle-orm/pg-core";
-import { actorShopId, actorUserId, web } from "./roles.ts";
+import { actorEmail, actorShopId, actorUserId, web } from "./roles.ts";
 import { shops } from "./shops.ts";
 import { users } from "./users.ts";
 
@@ -30,7 +30,7 @@ export const memberships = pgTable(
     pgPolicy("memberships_by_invitation", {
       for: "insert",
       to: web,
-      withCheck: sql`user_id = ${actorUserId} and exists (select 1 from invitations i where i.shop_id = memberships.shop_id and i.role = memberships.role and i.accepted_at is null)`,
+      withCheck: sql`user_id = ${actorUserId} and exists (select 1 from invitations i where i.email = ${actorEmail} and i.shop_id = memberships.shop_id and i.role = memberships.role and i.accepted_at is null)`,
     }),
   ],
 );

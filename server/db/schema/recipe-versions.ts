@@ -11,6 +11,7 @@ import {
   primaryKey,
   text,
   timestamp,
+  unique,
   uuid,
 } from "drizzle-orm/pg-core";
 import type { RecipeOrigin } from "../../../shared/contracts/recipes.ts";
@@ -56,6 +57,7 @@ export const recipeVersions = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.recipeId, t.number] }),
+    unique("recipe_versions_of_shop").on(t.recipeId, t.number, t.shopId),
     foreignKey({
       name: "recipe_versions_recipe",
       columns: [t.recipeId, t.shopId],

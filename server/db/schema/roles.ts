@@ -12,6 +12,8 @@ export const actorUserId = sql`(select nullif(current_setting('app.user_id', tru
 /** The verified e-mail of whoever signs in, and the provider's name for them: set while they sign in. */
 export const actorEmail = sql`(select nullif(current_setting('app.email', true), ''))`;
 export const actorIdentity = sql`(select nullif(current_setting('app.identity', true), ''))`;
+/** False in every transaction of a request. Sessions and request counts are kept outside of one, by the server itself. */
+export const nobodyActs = sql`(select coalesce(current_setting('app.acting', true), '') <> 'yes')`;
 export const actorIsAdmin = sql`(select current_setting('app.admin', true) = 'yes')`;
 
 /** The policy of every tenant table: rows of the acting shop, to read and to write, and none besides. */

@@ -13,9 +13,13 @@ import {
   uuid,
   varchar,
 } from "drizzle-orm/pg-core";
-import { actorUserId, web } from "./roles.ts";
+import { actorUserId, nobodyActs, web } from "./roles.ts";
 
-/** The layout connect-pg-simple reads and writes. */
+/**
+ * The layout connect-pg-simple reads and writes. It finds a session before anybody is known, so no actor can own the
+ * row; instead the table is closed to every transaction in which somebody acts. The cookie is signed besides: a
+ * session's id alone opens nothing.
+ */
 export const sessions = pgTable(
   "sessions",
   {
@@ -23,7 +27,10 @@ export const sessions = pgTable(
     sess: json("sess").notNull(),
     expire: timestamp("expire", { precision: 6 }).notNull(),
   },
-  (t) => [index("sessions_expire").on(t.expire)],
+  (t) => [
+    index("sessions_expire").on(t.expire),
+    pgPolicy("sessions_store", { for: "all", to: web, using: nobodyActs, withCheck: nobodyActs }),
+  ],
 );
 
 /** Answers already given to POST requests, so that one sent twice is done once. */
@@ -57,5 +64,8 @@ export const rateLimits = pgTable(
     hits: integer("hits").notNull(),
     resetAt: timestamp("reset_at", { withTimezone: true }).notNull(),
   },
-  (t) => [index("rate_limits_reset").on(t.resetAt)],
+  (t) => [
+    index("rate_limits_reset").on(t.resetAt),
+    pgPolicy("rate_limits_counting", { for: "all", to: web, using: nobodyActs, withCheck: nobodyActs }),
+  ],
 );

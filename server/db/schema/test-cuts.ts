@@ -43,8 +43,8 @@ export const testCuts = pgTable(
   (t) => [
     foreignKey({
       name: "test_cuts_version",
-      columns: [t.recipeId, t.versionNumber],
-      foreignColumns: [recipeVersions.recipeId, recipeVersions.number],
+      columns: [t.recipeId, t.versionNumber, t.shopId],
+      foreignColumns: [recipeVersions.recipeId, recipeVersions.number, recipeVersions.shopId],
     }).onDelete("cascade"),
     index("test_cuts_recipe").on(t.recipeId, t.cutAt),
     index("test_cuts_shop").on(t.shopId, t.cutAt),

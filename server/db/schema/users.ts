@@ -1,11 +1,11 @@
 import { sql } from "drizzle-orm";
-import { pgEnum, pgPolicy, pgTable, text, timestamp, unique, uuid } from "drizzle-orm/pg-core";
+import { check, pgEnum, pgPolicy, pgTable, text, timestamp, unique, uuid } from "drizzle-orm/pg-core";
 import { actorEmail, actorIdentity, actorShopId, actorUserId, web } from "./roles.ts";
 
 export const unitSystem = pgEnum("unit_system", ["metric", "inch"]);
 export const theme = pgEnum("theme", ["system", "light", "dark"]);
 
-/** A person. `provider` and `subject` are empty until they first sign in. */
+/** A person, by an e-mail address that was verified. `provider` and `subject` are empty until they first sign in. */
 export const users = pgTable(
   "users",
   {
@@ -21,6 +21,7 @@ export const users = pgTable(
   (t) => [
     unique("users_identity").on(t.provider, t.subject),
     unique("users_email").on(t.email),
+    check("users_email_lower", sql`email = lower(email)`),
     pgPolicy("users_own_shop", {
       for: "select",
       to: web,
@@ -31,12 +32,17 @@ export const users = pgTable(
       to: web,
       using: sql`provider || '|' || subject = ${actorIdentity} or email = ${actorEmail}`,
     }),
-    pgPolicy("users_first_sign_in", { for: "insert", to: web, withCheck: sql`email = ${actorEmail}` }),
+    pgPolicy("users_first_sign_in", {
+      for: "insert",
+      to: web,
+      withCheck: sql`email = ${actorEmail} and provider || '|' || subject = ${actorIdentity}`,
+    }),
+    // Oneself, or the prepared account that whoever signs in takes over. A trigger refuses any later change of identity.
     pgPolicy("users_self", {
       for: "update",
       to: web,
-      using: sql`id = ${actorUserId} or email = ${actorEmail}`,
-      withCheck: sql`id = ${actorUserId} or email = ${actorEmail}`,
+      using: sql`id = ${actorUserId} or (email = ${actorEmail} and subject is null)`,
+      withCheck: sql`id = ${actorUserId} or (email = ${actorEmail} and provider || '|' || subject = ${actorIdentity})`,
     }),
   ],
 );

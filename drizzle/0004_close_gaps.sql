@@ -1,3 +1,0 @@
-CREATE UNIQUE INDEX "applications_waiting_email" ON "applications" USING btree ("email") WHERE state = 'waiting';--> statement-breakpoint
-ALTER TABLE "applications" ADD CONSTRAINT "applications_email" CHECK (email = lower(email));--> statement-breakpoint
-ALTER POLICY "applications_anyone_applies" ON "applications" TO web WITH CHECK (state = 'waiting' and reason = '' and decided_at is null and decided_by is null and shop_id is null);
