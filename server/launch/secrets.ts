@@ -11,8 +11,6 @@ export const Secrets = z.object({
   owner: Secret,
   web: Secret,
   editionBuilder: Secret,
-  /** Keys the digests of what editions were built from: never changes, or the next edition cannot be compared. */
-  editionMarks: Secret,
   session: Secret,
   oidcClient: Secret,
   /** Ties a shop to its mark in published editions: a new one would break that tie. */
@@ -27,7 +25,6 @@ export function generateSecrets(): Secrets {
     owner: secret(),
     web: secret(),
     editionBuilder: secret(),
-    editionMarks: secret(),
     session: secret(),
     oidcClient: secret(),
     editionMarks: secret(),

@@ -47,7 +47,6 @@ function makeEnvironment(postgres: PostgresServer, secrets: Secrets, ports: Port
     DATABASE_URL: postgres.urlFor(roles.web, secrets.web, database),
     EDITION_DATABASE_URL: postgres.urlFor(roles.editionBuilder, secrets.editionBuilder, database),
     EDITION_MARKS_KEY: secrets.editionMarks,
-    EDITION_MARKS_KEY: secrets.editionMarks,
     OIDC_ISSUER: `http://127.0.0.1:${ports.signIn.port}`,
     OIDC_CLIENT_ID: "tempermark",
     OIDC_CLIENT_SECRET: secrets.oidcClient,

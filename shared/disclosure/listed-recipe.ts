@@ -83,7 +83,8 @@ export function shownListings(
   return here.map(({ recipe }) => recipe).sort(byFigures);
 }
 
-function byFigures(a: ListedRecipe, b: ListedRecipe): number {
+/** By what the recipes say, the random id last. */
+export function byFigures(a: ListedRecipe, b: ListedRecipe): number {
   const figuresOf = ({ thicknessMm, setpoints: s }: ListedRecipe) => [
     thicknessMm,
     s.feedMmMin ?? 0,
