@@ -1,6 +1,6 @@
 import { quantileShares } from "../disclosure/tails.ts";
 import { type Metric, metricDefinitions } from "../recipes/metrics.ts";
-import { formatQuantity } from "../units/format.ts";
+import { formatWithUnit } from "../units/format.ts";
 import type { UnitSystem } from "../units/units.ts";
 import type { Standing } from "./standing.ts";
 
@@ -25,9 +25,8 @@ const words: Record<Metric, Words> = {
 
 /** A standing in one sentence, such as "Your 2,450 mm/min is quicker than most: about 82 % of peers cut slower." */
 export function standingSentence(metric: Metric, value: number, standing: Standing, unitSystem: UnitSystem): string {
-  const { text, unit } = formatQuantity(value, metricDefinitions[metric].quantity, unitSystem);
   const { more, less, peersBelow, peersAbove } = words[metric];
-  const own = `Your ${text} ${unit}`;
+  const own = `Your ${formatWithUnit(value, metricDefinitions[metric].quantity, unitSystem)}`;
   const { percentile, position, edge } = standing;
 
   if (percentile === null && edge !== null) {

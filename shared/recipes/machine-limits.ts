@@ -1,5 +1,7 @@
 import type { LimitHit, StartingSetpoint } from "../contracts/starting-recipe-figures.ts";
 import { roundForRelease } from "../disclosure/rounding.ts";
+import { formatWithUnit } from "../units/format.ts";
+import type { UnitSystem } from "../units/units.ts";
 import type { Metric } from "./metrics.ts";
 import type { MachineLimits } from "./starting-input.ts";
 
@@ -14,31 +16,16 @@ interface Bent {
  * Bends a starting recipe to what the machine can do, and says so wherever it does. Less current means less heat, so the
  * feed is slowed in proportion to it first, and held to the table's top feed after.
  */
-export function applyMachineLimits(setpoints: StartingSetpoints, machine: MachineLimits): Bent {
-  const start: Bent = { setpoints, limits: [] };
-  const fed = capAt(
-    start,
-    "currentA",
-    "power-source-current",
-    machine.powerSourceMaxCurrentA,
-    `the ${machine.powerSourceMaxCurrentA} A your power source gives`,
-  );
+export function applyMachineLimits(setpoints: StartingSetpoints, machine: MachineLimits, units: UnitSystem): Bent {
+  const { powerSourceMaxCurrentA, topFeedMmMin, torchPressureBar } = machine;
+  const current = `the ${formatWithUnit(powerSourceMaxCurrentA, "current", units)} your power source gives`;
+  const feed = `your table's top feed of ${formatWithUnit(topFeedMmMin, "feed", units)}`;
+  const fed = capAt({ setpoints, limits: [] }, "currentA", "power-source-current", powerSourceMaxCurrentA, current);
   const slowed = slowWithCurrent(fed, setpoints.currentA.value);
-  const held = capAt(
-    slowed,
-    "feedMmMin",
-    "top-feed",
-    machine.topFeedMmMin,
-    `your table's top feed of ${machine.topFeedMmMin} mm/min`,
-  );
-  if (machine.torchPressureBar === null) return held;
-  return capAt(
-    held,
-    "pressureBar",
-    "torch-pressure",
-    machine.torchPressureBar,
-    `the ${machine.torchPressureBar} bar you have at the torch`,
-  );
+  const held = capAt(slowed, "feedMmMin", "top-feed", topFeedMmMin, feed);
+  if (torchPressureBar === null) return held;
+  const pressure = `the ${formatWithUnit(torchPressureBar, "pressure", units)} you have at the torch`;
+  return capAt(held, "pressureBar", "torch-pressure", torchPressureBar, pressure);
 }
 
 function capAt(bent: Bent, metric: Metric, limit: LimitHit["limit"], most: number, what: string): Bent {

@@ -4,6 +4,7 @@ import { roundForRelease, roundingStep } from "../disclosure/rounding.ts";
 import type { Material } from "../materials/materials.ts";
 import { bandLabel, bandNominalMm } from "../peers/peer-group.ts";
 import { fromScale, toScale } from "../peers/scale.ts";
+import { formatWithUnit } from "../units/format.ts";
 import { type Metric, metricDefinitions } from "./metrics.ts";
 import { quartileStretch } from "./prediction-interval.ts";
 import type { EstimateContext } from "./starting-input.ts";
@@ -30,7 +31,8 @@ export function peersEstimate(metric: Metric, context: EstimateContext): Startin
     },
   ];
   if (exponent !== null && factor !== 1) {
-    const text = `Moved from ${bandNominalMm(band)} mm to ${context.thicknessMm} mm: thickness to the power ${exponent}, as fitted over the network.`;
+    const shown = (mm: number) => formatWithUnit(mm, "thickness", context.units);
+    const text = `Moved from ${shown(bandNominalMm(band))} to ${shown(context.thicknessMm)}: thickness to the power ${exponent}, as fitted over the network.`;
     steps.push({ kind: "thickness", text });
   }
   steps.push({

@@ -1,4 +1,5 @@
 import type { ProcessGas } from "../materials/materials.ts";
+import { barPerPsi, mmPerInch } from "../units/units.ts";
 import type { Metric } from "./metrics.ts";
 
 /** A rule of thumb's answer: every one of them is common practice, no source. */
@@ -27,8 +28,8 @@ const currentByNozzle = [
   { nozzleMm: 1, low: 50, high: 55 },
 ] as const;
 
-/** 65 to 70 psi at the torch, bar gauge (1 psi = 0.0689476 bar). */
-const pressureBar = { low: 65 * 0.0689476, high: 70 * 0.0689476 };
+/** 65 to 70 psi at the torch, in bar gauge. */
+const pressureBar = { low: 65 * barPerPsi, high: 70 * barPerPsi };
 
 /** About 1/16 in, mm. The room to either side is ours: a quarter of it. */
 export const firstCutHeightMm = 1.6;
@@ -40,8 +41,8 @@ const pierceOverCutHeight = { low: 2, high: 2.5 };
  */
 export function practiceNozzleMm(thicknessMm: number): 0.6 | 0.8 | 1 {
   const asSold = 0.05;
-  if (thicknessMm < 25.4 / 8 - asSold) return 0.6;
-  return thicknessMm <= 25.4 / 4 + asSold ? 0.8 : 1;
+  if (thicknessMm < mmPerInch / 8 - asSold) return 0.6;
+  return thicknessMm <= mmPerInch / 4 + asSold ? 0.8 : 1;
 }
 
 /**

@@ -1,5 +1,6 @@
 import type { NetworkFigures, ReleasedGroup } from "../contracts/released-figures.ts";
 import type { Material, ProcessGas } from "../materials/materials.ts";
+import type { UnitSystem } from "../units/units.ts";
 
 /** What of a machine bends a starting recipe. */
 export interface MachineLimits {
@@ -19,6 +20,8 @@ export interface StartingRecipeInput {
   /** Released groups of the material; those of other gases are passed over. */
   groups: readonly ReleasedGroup[];
   network: NetworkFigures | null;
+  /** What the words name quantities in; figures stay in stored units. */
+  units: UnitSystem;
 }
 
 /** The input with the nozzle settled, as every estimate sees it. */

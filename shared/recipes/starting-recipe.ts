@@ -28,7 +28,7 @@ export function startingRecipe(input: StartingRecipeInput): StartingRecipe {
   const context = { ...open, cutHeightMm: estimate("cutHeightMm", open).value };
   const estimated = Object.fromEntries(metrics.map((metric) => [metric, estimate(metric, context)]));
   const whole = keepPierceAboveCut(estimated as StartingRecipe["setpoints"]); // one for each metric
-  const { setpoints, limits } = applyMachineLimits(whole, input.machine);
+  const { setpoints, limits } = applyMachineLimits(whole, input.machine, input.units);
   return {
     schemaVersion: 1,
     units: "Each field's name ends in its unit: A, bar gauge, mm/min, mm, s, V",

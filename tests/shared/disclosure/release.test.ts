@@ -23,10 +23,8 @@ function build(contributions: Contribution[], memory: GroupMemory | null, editio
   return { figures, memory: rememberRelease(contributions, memory, parameters, figures) };
 }
 
-const shops = (count: number, currentA = (shop: number) => 40 + shop) =>
-  Array.from({ length: count }, (_, i) =>
-    makeContribution(i + 1, { currentA: currentA(i + 1), feedMmMin: 1000 + 100 * i }),
-  );
+const shops = (count: number) =>
+  Array.from({ length: count }, (_, i) => makeContribution(i + 1, { currentA: 41 + i, feedMmMin: 1000 + 100 * i }));
 
 const change = (contributions: Contribution[], changed: number[], metric: Metric, value: number | null) =>
   contributions.map((c) => (changed.includes(c.shop) ? { ...c, setpoints: { ...c.setpoints, [metric]: value } } : c));
@@ -82,13 +80,6 @@ describe("release of a group", () => {
 
   test("two shops joined: the old figures stay", () => {
     const first = build(shops(6), null);
-    expect(
-      build(
-        shops(8, (s) => 10 * s),
-        build(shops(6), first.memory, edition2).memory,
-        edition3,
-      ).figures,
-    ).not.toEqual(first.figures);
     expect(build(shops(8), first.memory, edition2).figures).toEqual(first.figures);
   });
 
