@@ -1,6 +1,6 @@
 import { useQueryClient } from "@tanstack/react-query";
 import { useEffect, useState } from "react";
-import { useRevalidator } from "react-router-dom";
+import { useLocation, useNavigate } from "react-router-dom";
 import { getSession } from "#shared/contracts/accounts.ts";
 import { call } from "../lib/api.ts";
 import { ApiProblem } from "../lib/api-problem.ts";
@@ -12,7 +12,8 @@ const waitsS = [1, 2, 4, 8, 15];
 /** Stands in for a page while the server or its database is away, and brings the page back by itself. */
 export function TryingAgain({ problem }: { problem: ApiProblem }) {
   const queries = useQueryClient();
-  const { revalidate } = useRevalidator();
+  const navigate = useNavigate();
+  const location = useLocation();
   const [attempt, setAttempt] = useState(0);
 
   useEffect(() => {
@@ -23,7 +24,8 @@ export function TryingAgain({ problem }: { problem: ApiProblem }) {
       if (stopped.signal.aborted) return;
       if (answers) {
         queries.removeQueries({ predicate: (query) => query.state.status === "error" });
-        await revalidate();
+        // The route gives up its error only when the location is new; the address stays as it is.
+        await navigate(location, { replace: true, state: location.state, preventScrollReset: true });
       }
       // Counts on even after a good answer: the page's own request may be what still fails.
       setAttempt((count) => count + 1);
@@ -32,7 +34,7 @@ export function TryingAgain({ problem }: { problem: ApiProblem }) {
       clearTimeout(timer);
       stopped.abort();
     };
-  }, [attempt, queries, revalidate]);
+  }, [attempt, queries, navigate, location]);
 
   return (
     <section className="max-w-text" role="status">
