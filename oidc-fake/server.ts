@@ -67,11 +67,12 @@ async function interact(
     if (request.method !== "POST") return send(response, 200, "text/html", chooserPage(accounts));
     const sub = (await readForm(request)).get("sub");
     const known = accounts.find((account) => account.sub === sub);
-    if (known && session?.accountId !== known.sub) await forgetPerson(provider, session?.uid);
     const result = known
       ? { login: { accountId: known.sub } }
       : { error: "access_denied", error_description: "Sign-in was cancelled" };
-    await provider.interactionFinished(request, response, result, { mergeWithLastSubmission: false });
+    const next = await provider.interactionResult(request, response, result, { mergeWithLastSubmission: false });
+    if (known && session?.accountId !== known.sub) await forgetPerson(provider, session?.uid);
+    response.writeHead(303, { location: next }).end();
   } catch (error) {
     send(response, 400, "text/html", problemPage("This sign-in has ended", (error as Error).message));
   }
