@@ -2,9 +2,9 @@ import { sql } from "drizzle-orm";
 import { doublePrecision, index, integer, jsonb, pgPolicy, pgTable, primaryKey, text, uuid } from "drizzle-orm/pg-core";
 import { editions } from "./editions.ts";
 import { material, processGas } from "./recipe-versions.ts";
-import { actorIsAdmin, editionBuilder, web } from "./roles.ts";
+import { actorIsAdmin, actorUserId, editionBuilder, web } from "./roles.ts";
 
-const readable = sql`exists (select 1 from editions e where e.id = edition_id and e.state = 'published') or ${actorIsAdmin}`;
+const readable = sql`(${actorUserId} is not null and exists (select 1 from editions e where e.id = edition_id and e.state = 'published')) or ${actorIsAdmin}`;
 
 /** What an edition says of one peer group: released figures, or the reason there are none. */
 export const editionGroups = pgTable(

@@ -1,6 +1,6 @@
 import { sql } from "drizzle-orm";
 import { integer, jsonb, pgEnum, pgPolicy, pgTable, text, timestamp, uuid } from "drizzle-orm/pg-core";
-import { adminMay, editionBuilder, web } from "./roles.ts";
+import { actorUserId, adminMay, editionBuilder, web } from "./roles.ts";
 import { users } from "./users.ts";
 
 export const editionState = pgEnum("edition_state", ["built", "published", "discarded"]);
@@ -24,7 +24,11 @@ export const editions = pgTable(
     publishedBy: uuid("published_by").references(() => users.id, { onDelete: "set null" }),
   },
   () => [
-    pgPolicy("editions_published", { for: "select", to: web, using: sql`state = 'published'` }),
+    pgPolicy("editions_published", {
+      for: "select",
+      to: web,
+      using: sql`state = 'published' and ${actorUserId} is not null`,
+    }),
     adminMay("editions", "select"),
     adminMay("editions", "update"),
     pgPolicy("editions_builder", { for: "all", to: editionBuilder, using: sql`true`, withCheck: sql`true` }),
