@@ -79,8 +79,8 @@ function parseRequest<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodT
 ) {
   const params = endpoint.params.safeParse(req.params);
   if (!params.success) throw new ProblemError("not-found");
-  // express.json leaves any other body unread, which would pass for an empty one; `is` gives null where there is none.
-  if (req.is("application/json") === false) {
+  // express.json leaves any other body unread, which would pass for an empty one. A browser's POST without a body says so by its length.
+  if (req.get("Content-Length") !== "0" && req.is("application/json") === false) {
     throw new ProblemError("invalid-request", { detail: "Send the body as application/json" });
   }
   return {
