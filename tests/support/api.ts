@@ -1,5 +1,6 @@
 import { randomUUID } from "node:crypto";
 import { sign } from "cookie-signature";
+import type { Express } from "express";
 import pino from "pino";
 import supertest from "supertest";
 import { createApp } from "#server/app.ts";
@@ -11,6 +12,7 @@ export const testOrigin = "http://127.0.0.1:4300";
 const secret = "a-secret-for-tests-only-0123456789";
 
 export interface TestApi {
+  app: Express;
   database: TestDatabase;
   /** As the owner of the tables: for making rows, above row-level security. */
   owner: Database;
@@ -23,7 +25,10 @@ type Verb = "get" | "post" | "put" | "patch" | "delete";
 export type TestClient = Record<Verb, (path: string) => supertest.Test>;
 
 /** The real application on a database of its own. Sign-in is a session row and its cookie; the browser tests sign in for real. */
-export async function createTestApi(environment: Record<string, string> = {}): Promise<TestApi> {
+export async function createTestApi(
+  environment: Record<string, string> = {},
+  logger: pino.Logger = pino({ level: "silent" }),
+): Promise<TestApi> {
   const database = await createTestDatabase();
   const web = openDatabase(database.webUrl);
   const owner = openDatabase(database.ownerUrl);
@@ -39,8 +44,9 @@ export async function createTestApi(environment: Record<string, string> = {}): P
     LOG_LEVEL: "silent",
     ...environment,
   });
-  const app = createApp(settings, web, pino({ level: "silent" }));
+  const app = createApp(settings, web, logger);
   return {
+    app,
     database,
     owner,
     as: async (userId) => {
