@@ -1,5 +1,5 @@
 /** Why a text may not be shared; in the order they are looked for. */
-export type TextRefusal = "e-mail" | "phone" | "link" | "shop-name" | "person-name";
+export type TextRefusal = "e-mail" | "phone" | "link" | "shop-name" | "person-name" | "machine-name";
 
 export const textRefusalWords: Record<TextRefusal, string> = {
   "e-mail": "It holds an e-mail address",
@@ -7,11 +7,13 @@ export const textRefusalWords: Record<TextRefusal, string> = {
   link: "It holds a link or an account name",
   "shop-name": "It holds your shop's name or part of it",
   "person-name": "It holds the name of somebody at your shop",
+  "machine-name": "It holds the name of one of your machines",
 };
 
 export interface OwnNames {
   shop: string;
   people: readonly string[];
+  machines?: readonly string[];
 }
 
 /** Words half the trade has in its name: they tell nobody apart. */
@@ -37,6 +39,7 @@ export function screenText(text: string, own: OwnNames): TextRefusal[] {
     link: holdsLink(plain),
     "shop-name": holdsShopName(plain, own.shop),
     "person-name": own.people.some((person) => holdsPerson(plain, person)),
+    "machine-name": (own.machines ?? []).some((machine) => holdsMachine(plain, machine)),
   };
   return (Object.keys(found) as TextRefusal[]).filter((reason) => found[reason]);
 }
@@ -103,4 +106,11 @@ function holdsPerson(text: string, person: string): boolean {
   if (names.slice(0, Math.max(1, names.length - 1)).some((name) => isNamed(name, false))) return true;
   const whole = names.join("");
   return whole.length >= 6 && wordsOf(text).join("").includes(whole);
+}
+
+/** Machine names are often plain words, such as "North table": only the whole name tells, and only if more than trade words. */
+function holdsMachine(text: string, machine: string): boolean {
+  const name = wordsOf(machine);
+  if (name.every((word) => tradeWords.has(word) || word.length < 2)) return false;
+  return ` ${wordsOf(text).join(" ")} `.includes(` ${name.join(" ")} `);
 }
