@@ -1,7 +1,8 @@
 /**
  * Ranges of ISO 9013:2017 for the quality of a cut face. Each limit is c0 + c1 · a, a the cut thickness in mm.
- * Ranges 1 to 4 were seen second-hand; range 5 of u is from memory and unverified. The standard covers plasma cuts of
- * 0.5 to 150 mm.
+ * The limits of ranges 1 to 4 were seen second-hand and agree with memory; range 5 of u is from memory, unverified. The
+ * scope, plasma cuts of 0.5 to 150 mm, was seen in the standard's official abstract. That u leaves out a zone at both
+ * edges, and that Rz5 is taken over 15 mm where the face is roughest, is from memory: whoever measures sees to it.
  */
 const uLimitsMm = [
   { range: 1, c0: 0.05, c1: 0.003 },

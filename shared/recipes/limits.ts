@@ -9,6 +9,7 @@ import {
   type Setpoints,
   thicknessRangeMm,
 } from "./metrics.ts";
+import { likelyMeant } from "./unit-slips.ts";
 
 export type LimitedField = Metric | "thicknessMm" | "nozzleMm";
 
@@ -28,31 +29,61 @@ export const fieldLimits: Record<LimitedField, FieldLimits> = {
   nozzleMm: { label: "Nozzle", quantity: "nozzle", hard: nozzleRangeMm, soft: { min: 0.5, max: 2 } },
 };
 
-export interface Question {
+export type RecipeFigures = Partial<Setpoints> & { thicknessMm?: number | null; nozzleMm?: number | null };
+
+export interface FieldRemark {
   field: LimitedField;
   detail: string;
 }
 
-function outside(value: number | null, { min, max }: Range): value is number {
-  return value !== null && (value < min || value > max);
+/** What is said of one figure: nothing, a question that a person may wave through, or a refusal. */
+export type LimitCheck = { kind: "fine" } | { kind: "ask" | "refuse"; detail: string };
+
+function outside(value: number, { min, max }: Range): boolean {
+  return !(value >= min && value <= max); // NaN lies outside as well
 }
 
-/** What to ask before a recipe is kept: values that can be, but seldom are. */
-export function softQuestions(
-  figures: Partial<Setpoints> & { thicknessMm?: number; nozzleMm?: number },
+/**
+ * Holds one figure against what is possible and what is usual.
+ * @param value  stored unit
+ * @param units  the member's, in which the answer is worded
+ */
+export function checkSetpoint(field: LimitedField, value: number, units: UnitSystem): LimitCheck {
+  const { label, quantity, hard, soft } = fieldLimits[field];
+  const meant = likelyMeant(value, quantity, soft, units).join(" or ");
+  if (outside(value, hard)) {
+    const hint = meant && ` If you meant ${meant}, type the unit too.`;
+    return { kind: "refuse", detail: `Allowed: ${limitText(hard, quantity, units)}.${hint}` };
+  }
+  if (!outside(value, soft)) return { kind: "fine" };
+  const shown = formatWithUnit(value, quantity, units);
+  const hint = meant ? `Did you mean ${meant}?` : "Check it.";
+  return {
+    kind: "ask",
+    detail: `${label} of ${shown} is seldom right. Usual: ${limitText(soft, quantity, units)}. ${hint}`,
+  };
+}
+
+/** A pierce below the cut height would drive the torch into the sheet. */
+function pierceBelowCut({ pierceHeightMm, cutHeightMm }: RecipeFigures, units: UnitSystem): FieldRemark[] {
+  if (pierceHeightMm == null || cutHeightMm == null || pierceHeightMm >= cutHeightMm) return [];
+  const cut = formatWithUnit(cutHeightMm, "length", units);
+  return [{ field: "pierceHeightMm", detail: `Pierce height cannot be below cut height, ${cut}` }];
+}
+
+/** What a recipe's figures are refused for, and what to ask before they are kept. Missing figures pass. */
+export function checkLimits(
+  figures: RecipeFigures,
   units: UnitSystem,
-): Question[] {
+): { errors: FieldRemark[]; questions: FieldRemark[] } {
   const fields: LimitedField[] = ["thicknessMm", "nozzleMm", ...metrics];
-  return fields.flatMap((field) => {
-    const { label, quantity, soft } = fieldLimits[field];
-    const value = figures[field] ?? null;
-    if (!outside(value, soft)) return [];
-    const shown = formatWithUnit(value, quantity, units);
-    return [
-      {
-        field,
-        detail: `${label} of ${shown} is seldom right. Usual: ${limitText(soft, quantity, units)}. Check the unit.`,
-      },
-    ];
+  const remarks = fields.flatMap((field) => {
+    const value = figures[field];
+    if (value == null) return [];
+    const check = checkSetpoint(field, value, units);
+    return check.kind === "fine" ? [] : [{ field, ...check }];
   });
+  const of = (kind: "ask" | "refuse"): FieldRemark[] =>
+    remarks.filter((remark) => remark.kind === kind).map(({ field, detail }) => ({ field, detail }));
+  return { errors: [...of("refuse"), ...pierceBelowCut(figures, units)], questions: of("ask") };
 }

@@ -5,16 +5,24 @@ import { memberUnits, mmPerInch, type TypedQuantity, type UnitSystem } from "./u
 
 export type { TypedQuantity } from "./units.ts";
 
-/** Digits behind the point, at most, on screen. */
-const places: Record<TypedQuantity, Record<UnitSystem, number>> = {
-  current: { metric: 1, inch: 1 },
-  voltage: { metric: 1, inch: 1 },
-  delay: { metric: 2, inch: 2 },
-  pressure: { metric: 2, inch: 1 },
-  feed: { metric: 0, inch: 1 },
-  length: { metric: 2, inch: 3 },
-  thickness: { metric: 2, inch: 3 },
-  nozzle: { metric: 2, inch: 3 },
+interface Places {
+  /** Digits behind the point that are always shown, so that a column of figures lines up. */
+  min: number;
+  max: number;
+}
+
+const fixed = (places: number): Places => ({ min: places, max: places });
+const upTo = (places: number): Places => ({ min: 0, max: places });
+
+const places: Record<TypedQuantity, Record<UnitSystem, Places>> = {
+  current: { metric: upTo(1), inch: upTo(1) },
+  voltage: { metric: fixed(1), inch: fixed(1) },
+  delay: { metric: fixed(2), inch: fixed(2) },
+  pressure: { metric: fixed(2), inch: upTo(1) },
+  feed: { metric: upTo(0), inch: upTo(1) },
+  length: { metric: fixed(2), inch: fixed(3) },
+  thickness: { metric: upTo(2), inch: fixed(3) },
+  nozzle: { metric: { min: 1, max: 2 }, inch: { min: 1, max: 2 } },
 };
 
 export interface Shown {
@@ -22,12 +30,25 @@ export interface Shown {
   unit: string;
 }
 
-const number = (digits: number) => new Intl.NumberFormat("en", { maximumFractionDigits: digits });
-const numberFormats = Array.from({ length: 7 }, (_, digits) => number(digits));
+const formats = new Map<string, Intl.NumberFormat>();
+
+/** Formatters are slow to make and a table needs thousands of figures. */
+function formatOf({ min, max }: Places): Intl.NumberFormat {
+  const key = `${min}-${max}`;
+  const known = formats.get(key);
+  if (known) return known;
+  const made = new Intl.NumberFormat("en", {
+    minimumFractionDigits: min,
+    maximumFractionDigits: max,
+    signDisplay: "negative", // never "-0"
+  });
+  formats.set(key, made);
+  return made;
+}
 
 /** A number in English digits, "2,450.5", with at most so many places. The one number formatter. */
-export function formatNumber(value: number, maxPlaces = 0): string {
-  return (numberFormats[maxPlaces] ?? number(maxPlaces)).format(value);
+export function formatNumber(value: number, maxPlaces = 0, minPlaces = 0): string {
+  return formatOf({ min: minPlaces, max: maxPlaces }).format(value);
 }
 
 /** A whole count: "1,512". */
@@ -44,10 +65,23 @@ export function unitLabel(quantity: TypedQuantity, units: UnitSystem): string {
   return memberUnits[quantity][units].label;
 }
 
+/** A stored value in the member's unit, unrounded: for axes and scales. */
+export function toDisplayNumber(value: number, quantity: TypedQuantity, units: UnitSystem): number {
+  return value / memberUnits[quantity][units].factor;
+}
+
+/** The way back from `toDisplayNumber`. */
+export function fromDisplayNumber(shown: number, quantity: TypedQuantity, units: UnitSystem): number {
+  return shown * memberUnits[quantity][units].factor;
+}
+
 /** A stored value as the member reads it. */
 export function formatQuantity(value: number, quantity: TypedQuantity, units: UnitSystem): Shown {
-  const unit = memberUnits[quantity][units];
-  return { text: formatNumber(value / unit.factor, places[quantity][units]), unit: unit.label };
+  const { min, max } = places[quantity][units];
+  return {
+    text: formatNumber(toDisplayNumber(value, quantity, units), max, min),
+    unit: unitLabel(quantity, units),
+  };
 }
 
 /** The same as one piece of text: "2,450 mm/min". */
@@ -58,20 +92,44 @@ export function formatWithUnit(value: number, quantity: TypedQuantity, units: Un
 
 /** An allowed range: "10 to 400 A". Rounded inwards, so that what it names is allowed. */
 export function limitText(range: Range, quantity: TypedQuantity, units: UnitSystem): string {
-  const unit = memberUnits[quantity][units];
-  const step = 10 ** places[quantity][units];
+  const digits = places[quantity][units].max;
+  const step = 10 ** digits;
   // A hair of slack, or 25.4/25.4 would round up past itself.
-  const from = Math.ceil((range.min / unit.factor) * step - 1e-9) / step;
-  const to = Math.floor((range.max / unit.factor) * step + 1e-9) / step;
-  const text = (value: number) => formatNumber(value, places[quantity][units]);
-  return `${text(from)} to ${text(to)} ${unit.label}`;
+  const from = Math.ceil(toDisplayNumber(range.min, quantity, units) * step - 1e-9) / step;
+  const to = Math.floor(toDisplayNumber(range.max, quantity, units) * step + 1e-9) / step;
+  return `${formatNumber(from, digits)} to ${formatNumber(to, digits)} ${unitLabel(quantity, units)}`;
 }
 
-/** What a field holds to begin with: exact enough that saving it again changes nothing. */
+/** Digits behind the point a person would type at most: a 64th of an inch takes six, a 16th four in mm. */
+const typedPlaces: Record<UnitSystem, number> = { metric: 4, inch: 6 };
+
+/**
+ * What a field holds to begin with: parsed again it gives the stored value, to eleven figures at least.
+ * A value that comes out even in the member's unit is a bare number. One that comes out even only in the other system's
+ * unit was typed in that: it stays so, with its unit ("3.2 mm" in an inch field), rather than grow into 0.1259842520.
+ */
 export function editText(value: number, quantity: TypedQuantity, units: UnitSystem): string {
-  const shown = value / memberUnits[quantity][units].factor;
-  // Ten figures: below what conversion rounds, above what anybody measures.
-  return String(Number(shown.toPrecision(10)));
+  const other: UnitSystem = units === "metric" ? "inch" : "metric";
+  const own = evenText(value, quantity, units);
+  if (own !== null) return own;
+  const theirs = evenText(value, quantity, other);
+  if (theirs !== null) return `${theirs} ${unitLabel(quantity, other)}`;
+  return withoutExponent(toDisplayNumber(value, quantity, units));
+}
+
+function evenText(value: number, quantity: TypedQuantity, units: UnitSystem): string | null {
+  const shown = toDisplayNumber(value, quantity, units);
+  const even = Number(shown.toFixed(typedPlaces[units]));
+  return Math.abs(even - shown) <= 1e-11 * Math.abs(shown) ? String(even) : null;
+}
+
+/** Twelve figures, as digits alone: no person types 1.2e-7. */
+function withoutExponent(value: number): string {
+  const whole = value === 0 ? 0 : Math.floor(Math.log10(Math.abs(value)));
+  return value
+    .toFixed(Math.min(100, Math.max(0, 11 - whole)))
+    .replace(/(\.\d*?)0+$/, "$1")
+    .replace(/\.$/, "");
 }
 
 /** As 1/8 or 3/16, where the thickness is a 64th of an inch or coarser; null elsewhere. */
@@ -86,12 +144,11 @@ export function inchFraction(mm: number, toleranceMm = 0.02): string | null {
   return whole > 0 ? `${whole} ${rest}/${below}` : `${rest}/${below}`;
 }
 
-/** Thickness as the trade says it: "3.2 mm"; for inch members "1/8 in", "11 ga (0.12 in)" or "0.1 in". */
+/** Thickness as the trade says it: "3.2 mm"; for inch members "1/8 in", "1/8 in (11 ga)" or "0.120 in (11 ga)". */
 export function formatThickness(mm: number, material: Material, units: UnitSystem): string {
-  if (units === "metric") return `${formatNumber(mm, 2)} mm`;
-  const decimal = `${formatNumber(mm / mmPerInch, 3)} in`;
-  const gauge = nearestGauge(material, mm);
-  if (gauge !== null) return `${gauge} ga (${decimal})`;
+  if (units === "metric") return formatWithUnit(mm, "thickness", units);
   const fraction = inchFraction(mm);
-  return fraction === null ? decimal : `${fraction} in`;
+  const inches = fraction === null ? formatWithUnit(mm, "thickness", units) : `${fraction} in`;
+  const gauge = nearestGauge(material, mm);
+  return gauge === null ? inches : `${inches} (${gauge} ga)`;
 }

@@ -10,7 +10,12 @@ const weightLbFt2 = [
   1.125, 1, 0.875, 0.75,
 ];
 const firstGauge = 3;
-export const gaugeRange = { min: firstGauge, max: firstGauge + weightLbFt2.length - 1 };
+const lastGauge = firstGauge + weightLbFt2.length - 1;
+
+/** The gauges kept here for a material. Galvanised sheet is rolled from gauge 8 on. */
+export function gaugeRange(material: Material): { min: number; max: number } {
+  return { min: material === "galvanised-steel" ? 8 : firstGauge, max: lastGauge };
+}
 
 /** lb/ft² in an inch of thickness: 41.82 for uncoated steel (ASTM B258, appendix), 40 in the old US standard. */
 const sheetSteel = 41.82;
@@ -34,19 +39,22 @@ function inches(material: Material, gauge: number): number {
 }
 
 /**
- * Sheet thickness of a gauge number in the material's own gauge system, mm.
- * @returns null where the system, as kept here, has no such gauge (3 to 26)
+ * Nominal sheet thickness of a gauge number in the material's own gauge system: mild steel by its weight (manufacturers'
+ * standard), galvanised the same with its zinc, stainless by the old US standard, the rest Brown & Sharpe.
+ * @returns mm, to the micrometre, which is finer than the printed tables; null where the system has no such gauge here
  */
 export function gaugeThicknessMm(material: Material, gauge: number): number | null {
-  if (!Number.isInteger(gauge) || gauge < gaugeRange.min || gauge > gaugeRange.max) return null;
-  return inches(material, gauge) * mmPerInch;
+  const { min, max } = gaugeRange(material);
+  if (!Number.isInteger(gauge) || gauge < min || gauge > max) return null;
+  return Math.round(inches(material, gauge) * mmPerInch * 1000) / 1000;
 }
 
 /** The gauge whose thickness lies within a tolerance of this one, or null. */
 export function nearestGauge(material: Material, thicknessMm: number, toleranceMm = 0.02): number | null {
+  const { min, max } = gaugeRange(material);
   let best: { gauge: number; off: number } | null = null;
-  for (let gauge = gaugeRange.min; gauge <= gaugeRange.max; gauge++) {
-    const off = Math.abs(inches(material, gauge) * mmPerInch - thicknessMm);
+  for (let gauge = min; gauge <= max; gauge++) {
+    const off = Math.abs(gaugeThicknessMm(material, gauge)! - thicknessMm); // within its range
     if (off <= toleranceMm && (best === null || off < best.off)) best = { gauge, off };
   }
   return best?.gauge ?? null;

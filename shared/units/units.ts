@@ -6,6 +6,10 @@ export type UnitSystem = (typeof unitSystems)[number];
 /** A quantity as a form or a table means it: sheet thickness may be typed as a gauge, and is shown in fractions. */
 export type TypedQuantity = Quantity | "thickness" | "nozzle";
 
+export function isLength(quantity: TypedQuantity): boolean {
+  return quantity === "length" || quantity === "thickness" || quantity === "nozzle";
+}
+
 /** Exact by definition: the inch is 25.4 mm, the pound 0.45359237 kg, standard gravity 9.80665 m/s², the bar 100 kPa. */
 export const mmPerInch = 25.4;
 export const barPerPsi = (0.45359237 * 9.80665) / (mmPerInch / 1000) ** 2 / 1e5;
@@ -30,18 +34,26 @@ export const memberUnits: Record<TypedQuantity, Record<UnitSystem, Unit>> = {
   feed: { metric: { label: "mm/min", factor: 1 }, inch: { label: "in/min", factor: mmPerInch } },
   length: { metric: mm, inch },
   thickness: { metric: mm, inch },
-  // Nozzles are sold by the millimetre nearly everywhere, yet an inch shop may measure one.
-  nozzle: { metric: mm, inch },
+  // Nozzle orifices are marked and sold in millimetres, in inch shops too. Common practice, no source.
+  nozzle: same(mm),
 };
 
-const length = { mm: 1, cm: 10, m: 1000, in: mmPerInch, ft: 12 * mmPerInch, thou: mmPerInch / 1000, um: 0.001 };
+const length: Record<string, number> = {
+  mm: 1,
+  cm: 10,
+  m: 1000,
+  in: mmPerInch,
+  ft: 12 * mmPerInch,
+  thou: mmPerInch / 1000,
+  um: 0.001,
+};
 
 /** Units a person may type for each kind of quantity, by their plainest spelling, in stored units. */
 export const typedUnits: Record<TypedQuantity, Record<string, number>> = {
   current: { a: 1, ma: 0.001 },
   voltage: { v: 1, mv: 0.001, kv: 1000 },
   delay: { s: 1, ms: 0.001, min: 60 },
-  pressure: { bar: 1, mbar: 0.001, psi: barPerPsi, kpa: 0.01, mpa: 10, pa: 1e-5 },
+  pressure: { bar: 1, mbar: 0.001, psi: barPerPsi, kpa: 0.01, mpa: 10, pa: 1e-5, "kgf/cm2": 0.980665 },
   feed: {
     "mm/min": 1,
     "mm/s": 60,
@@ -55,56 +67,4 @@ export const typedUnits: Record<TypedQuantity, Record<string, number>> = {
   length,
   thickness: length,
   nozzle: length,
-};
-
-/** Other spellings, after lower-casing and without spaces and full stops. */
-export const unitSpellings: Record<string, string> = {
-  '"': "in",
-  "″": "in",
-  "''": "in",
-  inch: "in",
-  inches: "in",
-  ins: "in",
-  "'": "ft",
-  feet: "ft",
-  foot: "ft",
-  mil: "thou",
-  mils: "thou",
-  thous: "thou",
-  micron: "um",
-  microns: "um",
-  µm: "um",
-  μm: "um",
-  millimetre: "mm",
-  millimetres: "mm",
-  millimeter: "mm",
-  millimeters: "mm",
-  amp: "a",
-  amps: "a",
-  ampere: "a",
-  amperes: "a",
-  volt: "v",
-  volts: "v",
-  sec: "s",
-  secs: "s",
-  second: "s",
-  seconds: "s",
-  msec: "ms",
-  psig: "psi",
-  barg: "bar",
-  bars: "bar",
-  ipm: "in/min",
-  "inches/min": "in/min",
-  "inch/min": "in/min",
-  "in/minute": "in/min",
-  inpermin: "in/min",
-  ips: "in/s",
-  "in/sec": "in/s",
-  "mm/sec": "mm/s",
-  "m/sec": "m/s",
-  mmpm: "mm/min",
-  mpm: "m/min",
-  fpm: "ft/min",
-  "mm/minute": "mm/min",
-  "m/minute": "m/min",
 };
