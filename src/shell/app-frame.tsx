@@ -50,9 +50,13 @@ export function AppFrame({ places, corner, demo, children }: AppFrameProps) {
 
 function DemoBanner() {
   return (
-    <p data-chrome="" className="border-b border-line bg-action-soft px-4 py-1 text-center text-sm text-ink">
+    <aside
+      aria-label="Demo"
+      data-chrome=""
+      className="border-b border-line bg-action-soft px-4 py-1 text-center text-sm text-ink"
+    >
       Demo data: every shop, person and number here is invented.
-    </p>
+    </aside>
   );
 }
 

@@ -24,7 +24,13 @@ export function DensityCurve({ density, scale, height }: { density: DensityShape
     .filter(({ x }) => Number.isFinite(x));
 
   return (
-    <svg width={scale.frame.width} height={height} className="block overflow-hidden" aria-hidden="true">
+    <svg
+      width={scale.frame.width}
+      height={height}
+      viewBox={`0 0 ${scale.frame.width} ${height}`}
+      className="block h-auto max-w-full overflow-hidden"
+      aria-hidden="true"
+    >
       <Shape.Area
         data={points}
         x={(point) => point.x}

@@ -25,6 +25,9 @@ const measures: Record<"full" | "mini", Measures> = {
 const lineHeight = 20;
 const leaderHeight = 6;
 
+/** Paper may be narrower than the screen it was measured on; then the drawing shrinks as a whole. */
+const svgClasses = "block h-auto max-w-full overflow-visible";
+
 export interface StripDrawingProps {
   quantiles: StripQuantiles;
   own: StripOwn | undefined;
@@ -41,15 +44,11 @@ export function StripDrawing({ quantiles, own, scale, size, tickText }: StripDra
   const labels = size === "full" ? stripLabels(ticks, tickText, width) : [];
   const moved = labels.some((label) => Math.abs(label.textX - label.x) > 1) ? leaderHeight : 0;
   const below = m.top + m.bar + m.top + moved;
+  const height = below + (labels.length > 0 ? lineHeight : 0);
   const flat = scale.ends[0] === scale.ends[1];
 
   return (
-    <svg
-      width={width}
-      height={below + (labels.length > 0 ? lineHeight : 0)}
-      className="block overflow-visible"
-      aria-hidden="true"
-    >
+    <svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} className={svgClasses} aria-hidden="true">
       <defs>
         <TemperGradient id={`${id}-temper`} />
         <Fades id={id} />
@@ -166,8 +165,15 @@ function OwnMark({ place, m }: { place: OwnPlace; m: Measures }) {
 export function WithheldDrawing({ frame, size }: { frame: StripFrame; size: "full" | "mini" }) {
   const id = useId();
   const m = measures[size];
+  const height = m.top * 2 + m.bar;
   return (
-    <svg width={frame.width} height={m.top * 2 + m.bar} className="block" aria-hidden="true">
+    <svg
+      width={frame.width}
+      height={height}
+      viewBox={`0 0 ${frame.width} ${height}`}
+      className={svgClasses}
+      aria-hidden="true"
+    >
       <defs>
         <pattern id={id} width="7" height="7" patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
           <rect width="1.5" height="7" className="fill-line-strong opacity-70" />

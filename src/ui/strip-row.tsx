@@ -19,7 +19,7 @@ export function StripRow({ name, unit, figure, note, children }: StripRowProps) 
       className="grid grid-cols-[1fr_auto] gap-x-4 gap-y-2 border-t border-line py-4 last:border-b md:grid-cols-[9rem_1fr_9rem] md:gap-x-6"
     >
       <div>
-        <h3 className="font-bold">{name}</h3>
+        <h2 className="font-bold">{name}</h2>
         <p className="text-sm text-muted">{unit}</p>
       </div>
       <div className="col-span-2 row-start-2 min-w-0 md:col-span-1 md:row-start-auto md:pt-1.5">{children}</div>

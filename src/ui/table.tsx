@@ -6,6 +6,8 @@ import { usePhone } from "./use-media-query.ts";
 export interface Column<Row> {
   key: string;
   header: string;
+  /** The header is for screen readers only, where the cells say enough to the eye. */
+  hideHeader?: boolean;
   /** The unit of the whole column, said once in its header. */
   unit?: string;
   cell: (row: Row) => ReactNode;
@@ -122,7 +124,7 @@ function Header<Row>({ column, sort, onSort }: HeaderProps<Row>) {
           <Arrow aria-hidden="true" size={14} className={sorted ? undefined : "invisible"} />
         </button>
       ) : (
-        <span className="inline-flex min-h-10 items-center gap-1">{words}</span>
+        <span className={column.hideHeader ? "sr-only" : "inline-flex min-h-10 items-center gap-1"}>{words}</span>
       )}
     </th>
   );

@@ -15,7 +15,7 @@ const rows: Row[] = [
 const columns: Column<Row>[] = [
   { key: "name", header: "Recipe", cell: (row) => row.name, rowHeader: true, sortable: true },
   { key: "feed", header: "Feed", unit: "mm/min", cell: (row) => row.feed, numeric: true, sortable: true },
-  { key: "more", header: "More", cell: () => "–" },
+  { key: "more", header: "More", hideHeader: true, cell: () => "–" },
 ];
 const byName = (row: Row) => row.name;
 
@@ -57,6 +57,11 @@ test("a header sorts upward first, then turns round", async () => {
 test("without a way to sort, headers are plain words", () => {
   render(<Table caption="Recipes" columns={columns} rows={rows} rowKey={byName} />);
   expect(screen.queryByRole("button")).toBeNull();
+});
+
+test("a hidden header still names its column", () => {
+  render(<Table caption="Recipes" columns={columns} rows={rows} rowKey={byName} />);
+  expect(screen.getByRole("columnheader", { name: "More" })).toBeTruthy();
 });
 
 test("rows are named by their header cell", () => {
