@@ -58,8 +58,12 @@ function makeEnvironment(postgres: PostgresServer, secrets: Secrets, ports: Port
 }
 
 /** For commands given beside the running product, such as `npm run edition`. */
-function leaveForCommands(folder: string, { EDITION_DATABASE_URL, EDITION_MARKS_KEY }: NodeJS.ProcessEnv): void {
-  const settings = { EDITION_DATABASE_URL, EDITION_MARKS_KEY };
+function leaveForCommands(
+  folder: string,
+  ownerUrl: string,
+  { EDITION_DATABASE_URL, EDITION_MARKS_KEY }: NodeJS.ProcessEnv,
+): void {
+  const settings = { OWNER_DATABASE_URL: ownerUrl, EDITION_DATABASE_URL, EDITION_MARKS_KEY };
   writePrivateFile(path.join(folder, "environment.json"), `${JSON.stringify(settings, null, 2)}\n`);
 }
 
@@ -163,7 +167,7 @@ export async function startProduct(
   await prepareDatabase(postgres, secrets, say);
   const ports = await reservePorts(options);
   const env = makeEnvironment(postgres, secrets, ports);
-  leaveForCommands(folder, env);
+  leaveForCommands(folder, postgres.urlFor(roles.owner, secrets.owner, database), env);
   const launcher = new Launcher(running, { logFolder, env, ...(options.dev ? { show: say } : {}) });
   launcher.watchPostgres(postgres);
   if (options.seed) await fillWithDemo(launcher, postgres, secrets, say);
