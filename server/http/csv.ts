@@ -11,5 +11,6 @@ export interface CsvColumn<Row> {
  */
 export function writeCsv<Row>(columns: readonly CsvColumn<Row>[], rows: readonly Row[]): string {
   const table = [columns.map(({ header }) => header), ...rows.map((row) => columns.map(({ value }) => value(row)))];
-  return stringify(table, { record_delimiter: "\r\n", escape_formulas: true, bom: true });
+  // Without quote_record_delimiter a lone line feed in a note would go out unquoted and break its row in two.
+  return stringify(table, { record_delimiter: "\r\n", quote_record_delimiter: true, escape_formulas: true, bom: true });
 }

@@ -8,6 +8,8 @@ import { shares } from "#server/db/schema/shares.ts";
 import { shops } from "#server/db/schema/shops.ts";
 import { testCuts } from "#server/db/schema/test-cuts.ts";
 import { networkAdmins, users } from "#server/db/schema/users.ts";
+import type { RecipeContent } from "#shared/contracts/recipes.ts";
+import type { TestCutInput } from "#shared/contracts/test-cuts.ts";
 
 type Owner = Pick<Database, "db">;
 
@@ -126,4 +128,38 @@ export function makeTestCut(
     ...values,
   };
   return one(db.insert(testCuts).values(row).returning());
+}
+
+/** What a member types for a recipe, as the API takes it: plain setpoints on 3.18 mm mild steel. */
+export function makeRecipeContent(machineId: string, values: Partial<RecipeContent> = {}): RecipeContent {
+  return {
+    machineId,
+    material: "mild-steel",
+    grade: "",
+    surface: "clean",
+    processGas: "air",
+    thicknessMm: 3.18,
+    nozzleMm: 0.8,
+    setpoints: plainSetpoints,
+    note: "",
+    ...values,
+  };
+}
+
+/** A clean cut as the API takes it, through and acceptable. */
+export function makeTestCutInput(values: Partial<TestCutInput> = {}): TestCutInput {
+  return {
+    versionNumber: 1,
+    cutAt: "2026-08-01T10:00:00Z",
+    cutThrough: true,
+    dross: "none",
+    topEdge: "square",
+    bevelDeg: null,
+    kerfWidthMm: null,
+    uMm: null,
+    rz5Um: null,
+    acceptable: true,
+    note: "",
+    ...values,
+  };
 }
