@@ -163,6 +163,17 @@ describe("release of a metric within its group", () => {
     expect(figures.every((f) => f.distributions.feedMmMin !== null)).toBe(true);
   });
 
+  test("a value put back where it was brings the metric's old figures back", () => {
+    const start = shops(8);
+    const first = build(start, null);
+    let last = first;
+    for (const edition of [edition2, edition3, edition4]) {
+      last = build(change(start, [1], "currentA", null), last.memory, edition);
+    }
+    expect(released(last.figures).distributions.currentA).toBeNull();
+    expect(build(start, last.memory, edition5).figures).toEqual(first.figures);
+  });
+
   test("a metric that reaches its quorum later is shown from then on", () => {
     const start = shops(8);
     const first = build(start, null);
