@@ -1,6 +1,8 @@
 import { createBrowserRouter, type RouteObject } from "react-router-dom";
+import type { Recipe } from "#shared/contracts/recipes.ts";
 import { NotFoundPage, ProblemPage } from "./shell/problem-page.tsx";
 import { BareFrame, RootLayout } from "./shell/root-layout.tsx";
+import { Skeleton } from "./ui/skeleton.tsx";
 
 /** A page that loads with its route, by the name it is exported under. */
 function page<Name extends string>(
@@ -12,8 +14,31 @@ function page<Name extends string>(
 }
 
 const machines = () => import("./features/machines/machine-page.tsx");
+const testCut = () => import("./features/test-cuts/new-test-cut-page.tsx");
+
+/** Features do not know each other: a recipe's page is put together here. */
+const recipePage: RouteObject = {
+  path: "/recipes/:id",
+  lazy: async () => {
+    const [{ RecipePage }, { RecipeTestCuts }, { SharingPanel }] = await Promise.all([
+      import("./features/recipes/recipe-page.tsx"),
+      import("./features/test-cuts/recipe-test-cuts.tsx"),
+      import("./features/sharing/sharing-panel.tsx"),
+    ]);
+    const testCuts = (recipe: Recipe) => <RecipeTestCuts recipe={recipe} />;
+    const sharing = (recipe: Recipe) => <SharingPanel recipe={recipe} />;
+    return { element: <RecipePage testCuts={testCuts} sharing={sharing} /> };
+  },
+};
 
 const pages: RouteObject[] = [
+  page("/recipes", () => import("./features/recipes/recipe-list-page.tsx"), "RecipeListPage"),
+  page("/recipes/new", () => import("./features/recipes/new-recipe-page.tsx"), "NewRecipePage"),
+  recipePage,
+  page("/recipes/:id/edit", () => import("./features/recipes/edit-recipe-page.tsx"), "EditRecipePage"),
+  page("/recipes/:id/compare", () => import("./features/recipes/compare-page.tsx"), "ComparePage"),
+  page("/recipes/:id/test-cuts/new", testCut, "NewTestCutPage"),
+  page("/test-cuts", () => import("./features/test-cuts/test-cut-list-page.tsx"), "TestCutListPage"),
   page("/machines", () => import("./features/machines/machine-list-page.tsx"), "MachineListPage"),
   page("/machines/new", machines, "NewMachinePage"),
   page("/machines/:id", machines, "MachinePage"),
@@ -24,6 +49,11 @@ export function createRouter() {
   return createBrowserRouter([
     {
       element: <RootLayout />,
+      hydrateFallbackElement: (
+        <BareFrame>
+          <Skeleton lines={8} />
+        </BareFrame>
+      ),
       errorElement: (
         <BareFrame>
           <ProblemPage />

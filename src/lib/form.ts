@@ -22,6 +22,8 @@ export interface ProblemFormOptions<In extends FieldValues, Out> {
   defaults: DefaultValues<In>;
   /** Sends it, and goes on from there. Rejects with ApiProblem. The key is the same while the content is the same. */
   submit: (output: Out, context: { idempotencyKey: string }) => Promise<unknown>;
+  /** Asked before anything is sent, about what is allowed but odd; false leaves the form as it is. */
+  confirm?: (output: Out) => Promise<boolean>;
   /** Where a field of the request is named otherwise in the form: "/thicknessMm" -> "thickness". */
   fieldNames?: Record<string, FieldPath<In>>;
 }
@@ -44,7 +46,7 @@ export interface ProblemForm<In extends FieldValues, Out> {
 export function useProblemForm<In extends FieldValues, Out>(
   options: ProblemFormOptions<In, Out>,
 ): ProblemForm<In, Out> {
-  const { id, schema, defaults, submit, fieldNames = {} } = options;
+  const { id, schema, defaults, submit, confirm, fieldNames = {} } = options;
   const [draft] = useState(() => readDraft(id));
   const [restored, setRestored] = useState(draft !== undefined);
   const [problem, setProblem] = useState<ApiProblem>();
@@ -71,6 +73,7 @@ export function useProblemForm<In extends FieldValues, Out>(
 
   async function send(output: Out): Promise<void> {
     setProblem(undefined);
+    if (confirm && !(await confirm(output))) return;
     const content = JSON.stringify(output);
     if (sent.current.content !== content) sent.current = { content, key: randomKey() };
     try {

@@ -1,13 +1,13 @@
 import { useSuspenseQuery } from "@tanstack/react-query";
 import { heightControlLabels, type Machine } from "#shared/contracts/machines.ts";
 import { formatQuantity } from "#shared/units/format.ts";
+import { machinesQuery } from "../../lib/machine-queries.ts";
 import { useSession } from "../../shell/session.queries.ts";
 import { ButtonLink } from "../../ui/button.tsx";
 import { EmptyState } from "../../ui/empty-state.tsx";
 import { PageHeader } from "../../ui/page-header.tsx";
 import { type Column, Table } from "../../ui/table.tsx";
 import { TextLink } from "../../ui/text-link.tsx";
-import { machinesQuery } from "./machines.queries.ts";
 
 export function MachineListPage() {
   const { units, shop } = useSession();

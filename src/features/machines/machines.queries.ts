@@ -3,17 +3,11 @@ import {
   createMachine,
   deleteMachine,
   getMachine,
-  listMachines,
   type Machine,
   type MachineInput,
   updateMachine,
 } from "#shared/contracts/machines.ts";
 import { call } from "../../lib/api.ts";
-
-export const machinesQuery = queryOptions({
-  queryKey: ["machines"],
-  queryFn: ({ signal }) => call(listMachines, {}, signal),
-});
 
 export const machineQuery = (id: string) =>
   queryOptions({

@@ -1,0 +1,27 @@
+import type { Machine } from "#shared/contracts/machines.ts";
+import type { RecipeContent } from "#shared/contracts/recipes.ts";
+import { checkLimits } from "#shared/recipes/limits.ts";
+import { formatWithUnit } from "#shared/units/format.ts";
+import type { UnitSystem } from "#shared/units/units.ts";
+
+/** What is allowed but worth a second look before it is kept: values seldom right, and values the machine cannot give. */
+export function oddFigures(content: RecipeContent, machine: Machine | undefined, units: UnitSystem): string[] {
+  const { thicknessMm, nozzleMm, setpoints } = content;
+  const seldom = checkLimits({ ...setpoints, thicknessMm, nozzleMm }, units).questions.map(({ detail }) => detail);
+  return [...seldom, ...beyondMachine(content, machine, units)];
+}
+
+function beyondMachine({ setpoints }: RecipeContent, machine: Machine | undefined, units: UnitSystem): string[] {
+  if (!machine) return [];
+  const { name, powerSourceMaxCurrentA, topFeedMmMin, torchPressureBar } = machine;
+  const limits = [
+    { value: setpoints.currentA, most: powerSourceMaxCurrentA, quantity: "current", what: "power source gives" },
+    { value: setpoints.feedMmMin, most: topFeedMmMin, quantity: "feed", what: "table cuts at" },
+    { value: setpoints.pressureBar, most: torchPressureBar, quantity: "pressure", what: "torch gets" },
+  ] as const;
+  return limits.flatMap(({ value, most, quantity, what }) => {
+    if (value === null || most === null || value <= most) return [];
+    const [wanted, given] = [value, most].map((figure) => formatWithUnit(figure, quantity, units));
+    return [`${wanted} is more than ${name} can do: at most ${given} is what its ${what}.`];
+  });
+}
