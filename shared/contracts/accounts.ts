@@ -1,7 +1,7 @@
 import { z } from "zod";
+import { unitSystems } from "../units/units.ts";
 import { defineEndpoint } from "./endpoint.ts";
 
-export const unitSystemNames = ["metric", "inch"] as const;
 export const themes = ["system", "light", "dark"] as const;
 
 /** Who is signed in, as the product's own tables know them; nulls for a visitor. */
@@ -16,7 +16,7 @@ export const Session = z.object({
     })
     .nullable(),
   admin: z.boolean(),
-  units: z.enum(unitSystemNames),
+  units: z.enum(unitSystems),
   theme: z.enum(themes),
   demo: z.boolean().describe("Everything here is invented demo data"),
 });
@@ -35,7 +35,7 @@ export const changePreferences = defineEndpoint({
   path: "/api/account/preferences",
   summary: "Choose units and theme",
   access: "signed-in",
-  body: z.object({ units: z.enum(unitSystemNames).optional(), theme: z.enum(themes).optional() }),
+  body: z.object({ units: z.enum(unitSystems).optional(), theme: z.enum(themes).optional() }),
   response: Session,
 });
 

@@ -77,12 +77,13 @@ function keepPierceAboveCut(setpoints: StartingRecipe["setpoints"]): StartingRec
 }
 
 function checkHeat(
-  { material, thicknessMm }: StartingRecipeInput,
+  { material, thicknessMm, gas }: StartingRecipeInput,
   setpoints: StartingRecipe["setpoints"],
 ): StartingHeatCheck | null {
   return heatCheck({
     material,
     thicknessMm,
+    gas,
     feedMmMin: setpoints.feedMmMin.value,
     kerfWidthMm: setpoints.kerfWidthMm.value,
     currentA: setpoints.currentA.value,

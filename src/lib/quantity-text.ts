@@ -1,6 +1,7 @@
 import { z } from "zod";
 import type { Material } from "#shared/materials/materials.ts";
 import type { Range } from "#shared/recipes/metrics.ts";
+import { likelyMeant } from "#shared/recipes/unit-slips.ts";
 import { formatQuantity, limitText, type TypedQuantity } from "#shared/units/format.ts";
 import { parseQuantity } from "#shared/units/parse.ts";
 import type { UnitSystem } from "#shared/units/units.ts";
@@ -22,7 +23,10 @@ export function readQuantity(text: string, { quantity, units, range, material }:
   const parsed = parseQuantity(text, quantity, units, material ? { material } : {});
   if (!parsed.ok) return parsed;
   const within = parsed.value >= range.min && parsed.value <= range.max;
-  return within ? parsed : { ok: false, problem: `Allowed: ${limitText(range, quantity, units)}` };
+  if (within) return parsed;
+  const meant = likelyMeant(parsed.value, quantity, range, units).join(" or ");
+  const hint = meant && ` If you meant ${meant}, type the unit too.`;
+  return { ok: false, problem: `Allowed: ${limitText(range, quantity, units)}.${hint}` };
 }
 
 /** The same as a live reading below a field. */
