@@ -61,7 +61,7 @@ async function publish(url: string, id?: string): Promise<void> {
       if (!wanted) throw new Error("No edition waits to be published.");
       return publishEdition(tx, { userId: null }, wanted);
     });
-    say(`Edition ${edition.number} is published: it shows ${edition.releasedGroups} groups.`);
+    say(`Edition ${edition.number} is published. Groups shown: ${edition.releasedGroups}.`);
   } finally {
     await session.end();
   }
@@ -73,7 +73,7 @@ async function list(url: string): Promise<void> {
     const editions = await listEditions(session.db);
     if (editions.length === 0) say("There is no edition yet.");
     for (const { number, state, date, releasedGroups } of editions) {
-      say(`${String(number).padStart(4)}  ${date}  ${state.padEnd(9)}  ${releasedGroups} groups shown`);
+      say(`${String(number).padStart(4)}  ${date}  ${state.padEnd(9)}  groups shown: ${releasedGroups}`);
     }
   } finally {
     await session.end();
