@@ -73,8 +73,8 @@ export const Recipe = z.object({
   machineName: z.string(),
   state: z.enum(recipeStates),
   sharing: z.enum(sharingLevels),
-  testCuts: z.number().int(),
-  acceptableTestCuts: z.number().int(),
+  testCuts: z.number().int().describe("Of all its versions"),
+  acceptableTestCuts: z.number().int().describe("Of all its versions"),
   version: RecipeVersion,
 });
 export type Recipe = z.infer<typeof Recipe>;
@@ -144,7 +144,8 @@ export const createRecipe = defineEndpoint({
 export const changeRecipe = defineEndpoint({
   method: "put",
   path: "/api/recipes/:id",
-  summary: "Save a new version; refused with both versions when the one it started from is no longer the newest",
+  summary:
+    "Save a new version; refused with the newest when it is not the one this started from; content it holds already makes none",
   access: "operator",
   params: IdParams,
   body: z.object({ content: RecipeContent, reason: Reason, baseVersion: z.number().int() }),

@@ -18,7 +18,10 @@ export function bookFilename(now: Date, extension: "json" | "csv"): string {
 export async function exportBook(tx: Db, actor: ShopActor, now: Date): Promise<Book> {
   const rows = await queries.listBook(tx, actor.shopId);
   const versions = new Map<string, RecipeVersion[]>(rows.map(({ id }) => [id, []]));
+  const newest = new Map(rows.map(({ id, version }) => [id, version.number]));
   for (const { version, changedBy } of await queries.listVersions(tx, actor.shopId)) {
+    // Read a moment later than the recipes: what was saved in between is left to the next export.
+    if (version.number > (newest.get(version.recipeId) ?? 0)) continue;
     versions.get(version.recipeId)?.push(presentVersion(version, changedBy));
   }
   return {
