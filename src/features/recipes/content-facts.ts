@@ -4,6 +4,8 @@ import { metricDefinitions, metrics } from "#shared/recipes/metrics.ts";
 import { formatThickness, formatWithUnit } from "#shared/units/format.ts";
 import type { UnitSystem } from "#shared/units/units.ts";
 
+const notSet = "Not set";
+
 export interface ContentFact {
   name: string;
   /** As a person reads it; "Not set" where there is nothing. */
@@ -34,7 +36,7 @@ export function contentFacts(
     }),
     ["Note to self", content.note],
   ];
-  return facts.map(([name, value]) => ({ name, value: value === "" ? "Not set" : value }));
+  return facts.map(([name, value]) => ({ name, value: value === "" ? notSet : value }));
 }
 
 export interface ContentChange {
@@ -59,9 +61,12 @@ export function contentChanges(
 
 /** A change in one line: "Feed rate 2,310 → 2,450 mm/min". */
 export function changeLine({ name, before, after }: ContentChange): string {
-  if (name === "Note to self") return before === "Not set" ? "Note to self added" : "Note to self changed";
+  if (name === "Note to self") return before === notSet ? "Note to self added" : "Note to self changed";
   const unit = sharedUnit(before, after);
-  return `${name} ${unit ? before.slice(0, -unit.length) : before} → ${after}`;
+  const [from, to] = [unit ? before.slice(0, -unit.length) : before, after].map((text) =>
+    text === notSet ? notSet.toLowerCase() : text,
+  );
+  return `${name} ${from} → ${to}`;
 }
 
 /** The unit both figures end in, so that it is said once. */

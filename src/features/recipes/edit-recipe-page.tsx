@@ -29,7 +29,11 @@ export function EditRecipePage() {
 
   return (
     <>
-      <PageHeader title={`Change ${name}`} back={{ to: `/recipes/${id}`, label: name }} />
+      <PageHeader
+        title="Change the recipe"
+        documentTitle={`Change ${name}`}
+        back={{ to: `/recipes/${id}`, label: name }}
+      />
       {recipe.state === "retired" ? (
         <Notice kind="watch" title="This recipe is retired">
           Bring it back before changing it.

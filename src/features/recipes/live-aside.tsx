@@ -33,18 +33,26 @@ export function LiveAside({ control, units, heatOnly }: LiveAsideProps) {
   const own = figuresSoFar(values, units);
   const { figures } = useGroupFigures(liveSubject(values, own));
   const heat = <HeatNote {...heatFigures(own)} material={values.material} gas={values.processGas} />;
-  if (heatOnly) return heat;
+  const cautions = <CautionsLine material={values.material} gas={values.processGas} currentA={own.currentA} />;
+  if (heatOnly) {
+    return (
+      <>
+        {heat}
+        {cautions}
+      </>
+    );
+  }
   return (
     <aside
       aria-label="What these figures mean"
       className="space-y-4 lg:sticky lg:top-[calc(var(--bar-height)+1rem)] lg:max-h-[calc(100dvh-var(--bar-height)-2rem)] lg:self-start lg:overflow-y-auto"
     >
       {heat}
+      {cautions}
       <section>
         <h2 className="text-lg font-bold">Among your peers</h2>
         <LiveStandings figures={figures} own={own} units={units} />
       </section>
-      <CautionsLine material={values.material} gas={values.processGas} currentA={own.currentA} />
     </aside>
   );
 }

@@ -56,9 +56,17 @@ export function recipeColumns(units: UnitSystem, narrow: boolean): Column<Recipe
       ),
     },
     { key: "machine", header: "Machine", sortable: true, cell: (recipe) => recipe.machineName },
-    { key: "state", header: "State", cell: (recipe) => <RecipeStateWord state={recipe.state} /> },
-    { key: "sharing", header: "Sharing", cell: (recipe) => sharingLevelLabels[recipe.sharing] },
+    {
+      key: "state",
+      header: "State, sharing",
+      cell: (recipe) => (
+        <>
+          <RecipeStateWord state={recipe.state} />
+          <span className="block pl-5 text-sm text-muted">{sharingLevelLabels[recipe.sharing]}</span>
+        </>
+      ),
+    },
     ...headers.map((header) => setpointColumn(header, units)),
   ];
-  return narrow ? columns.filter(({ key }) => key !== "sharing" && key !== "cutHeightMm") : columns;
+  return narrow ? columns.filter(({ key }) => key !== "cutHeightMm") : columns;
 }

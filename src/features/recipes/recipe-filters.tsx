@@ -10,7 +10,7 @@ import { Button } from "../../ui/button.tsx";
 import { SelectField } from "../../ui/select-field.tsx";
 import { TextField } from "../../ui/text-field.tsx";
 import { usePhone } from "../../ui/use-media-query.ts";
-import { isFiltered, listDefaults, type RecipeListState, readLengthFilter } from "./recipe-list-state.ts";
+import { isFiltered, listDefaults, type RecipeListState, readLengthFilter, sortChoices } from "./recipe-list-state.ts";
 
 export interface RecipeFiltersProps {
   state: RecipeListState;
@@ -38,6 +38,7 @@ export function RecipeFilters({ state, onChange, machines, units }: RecipeFilter
           value={state.q}
           onChange={(event) => onChange({ q: event.target.value })}
         />
+        {phone ? null : <SortField state={state} onChange={onChange} />}
         {phone ? (
           <Button aria-expanded={open} onClick={() => setOpen(!open)}>
             <ListFilter aria-hidden="true" size={18} />
@@ -51,7 +52,24 @@ export function RecipeFilters({ state, onChange, machines, units }: RecipeFilter
         ) : null}
       </div>
       {!phone || open || active ? fields : null}
+      {phone && (open || active) ? <SortField state={state} onChange={onChange} /> : null}
     </search>
+  );
+}
+
+/** Beside the column heads: a phone has none, and the last change has no column. */
+function SortField({ state, onChange }: Pick<RecipeFiltersProps, "state" | "onChange">) {
+  return (
+    <SelectField
+      label="Order"
+      className="md:ml-auto md:w-52"
+      choices={sortChoices}
+      value={`${state.sort} ${state.order}`}
+      onChange={(event) => {
+        const [sort = "", order = ""] = event.target.value.split(" ");
+        onChange({ sort, order });
+      }}
+    />
   );
 }
 

@@ -6,6 +6,7 @@ import { machinesQuery } from "../../lib/machine-queries.ts";
 import { useUrlState } from "../../lib/use-url-state.ts";
 import { useSession } from "../../shell/session.queries.ts";
 import { ButtonLink, buttonClasses } from "../../ui/button.tsx";
+import { classNames } from "../../ui/class-names.ts";
 import { EmptyState } from "../../ui/empty-state.tsx";
 import { PageHeader } from "../../ui/page-header.tsx";
 import { Pagination } from "../../ui/pagination.tsx";
@@ -61,13 +62,14 @@ export function RecipeListPage() {
   );
 }
 
+/** A phone finds the exports in the shop's menu. */
 function ListActions() {
   return (
     <>
-      <a href={exportBookCsv.path} download className={buttonClasses("quiet")}>
+      <a href={exportBookCsv.path} download className={classNames(buttonClasses("quiet"), "max-md:hidden")}>
         Export table
       </a>
-      <a href={exportBookJson.path} download className={buttonClasses("quiet")}>
+      <a href={exportBookJson.path} download className={classNames(buttonClasses("quiet"), "max-md:hidden")}>
         Export whole book
       </a>
       <ButtonLink to="/recipes/new" kind="primary" data-new="">

@@ -35,6 +35,30 @@ const sortOfColumn: Record<string, SortKey> = {
   changed: "changed",
 };
 
+const sortLabels: [SortKey, "asc" | "desc", string][] = [
+  ["changed", "desc", "Last changed first"],
+  ["changed", "asc", "Longest unchanged first"],
+  ["material", "asc", "Metal, A to Z"],
+  ["material", "desc", "Metal, Z to A"],
+  ["thickness", "asc", "Thinnest first"],
+  ["thickness", "desc", "Thickest first"],
+  ["nozzle", "asc", "Smallest nozzle first"],
+  ["nozzle", "desc", "Largest nozzle first"],
+  ["machine", "asc", "Machine, A to Z"],
+  ["machine", "desc", "Machine, Z to A"],
+  ["current", "asc", "Lowest current first"],
+  ["current", "desc", "Highest current first"],
+  ["pressure", "asc", "Lowest pressure first"],
+  ["pressure", "desc", "Highest pressure first"],
+  ["feed", "asc", "Slowest first"],
+  ["feed", "desc", "Quickest first"],
+  ["voltage", "asc", "Lowest arc voltage first"],
+  ["voltage", "desc", "Highest arc voltage first"],
+];
+
+/** Every order there is, in words. */
+export const sortChoices = sortLabels.map(([sort, order, label]) => ({ value: `${sort} ${order}`, label }));
+
 export function tableSort({ sort, order }: RecipeListState): Sort {
   const column = Object.keys(sortOfColumn).find((key) => sortOfColumn[key] === sort) ?? "changed";
   return { key: column, direction: order === "asc" ? "asc" : "desc" };

@@ -19,6 +19,7 @@ export interface SetpointFieldsProps {
 }
 
 const hints: Partial<Record<Metric, string>> = {
+  currentA: "As set on the power source.",
   pressureBar: "At the torch, while the gas flows.",
   arcVoltageV: "What the height control holds, as it reads it.",
   kerfWidthMm: "Measured slot width, or left empty.",

@@ -41,7 +41,12 @@ export function SubjectFields({ field, control, machines, units, material }: Sub
         {...field("machineId")}
       />
       <div className="grid grid-cols-1 gap-5 md:grid-cols-2">
-        <SelectField label="Metal" choices={choicesOf(materials, materialLabels)} {...field("material")} />
+        <SelectField
+          label="Metal"
+          hint="Gauges are read by the metal's own system."
+          choices={choicesOf(materials, materialLabels)}
+          {...field("material")}
+        />
         <FormQuantity
           control={control}
           name="thicknessMm"

@@ -6,7 +6,7 @@ import type { UnitSystem } from "#shared/units/units.ts";
 export const drossLabels: Record<(typeof drossAmounts)[number], string> = {
   none: "None",
   light: "Light",
-  moderate: "Some",
+  moderate: "Moderate",
   heavy: "Heavy",
 };
 
