@@ -1,3 +1,4 @@
+import { lazy } from "react";
 import { createBrowserRouter, type RouteObject } from "react-router-dom";
 import type { Recipe } from "#shared/contracts/recipes.ts";
 import { NotFoundPage, ProblemPage } from "./shell/problem-page.tsx";
@@ -14,6 +15,12 @@ function page<Name extends string>(
 }
 
 const machines = () => import("./features/machines/machine-page.tsx");
+const join = () => import("./features/applications/join-page.tsx");
+/** Apart from the first page, so that a visitor does not load it. */
+const OwnApplication = lazy(async () => {
+  const { OwnApplication } = await import("./features/applications/own-application.tsx");
+  return { default: OwnApplication };
+});
 const testCut = () => import("./features/test-cuts/new-test-cut-page.tsx");
 
 /** Features do not know each other: a recipe's page is put together here. */
@@ -31,7 +38,22 @@ const recipePage: RouteObject = {
   },
 };
 
+/** The first page is the visitor's; whoever has no shop yet is told of their application on it. */
+const homePage: RouteObject = {
+  path: "/",
+  lazy: async () => {
+    const { HomePage } = await import("./features/home/home-page.tsx");
+    return { element: <HomePage withoutShop={<OwnApplication />} /> };
+  },
+};
+
 const pages: RouteObject[] = [
+  homePage,
+  page("/join", join, "JoinPage"),
+  page("/join/received", join, "JoinReceivedPage"),
+  page("/applications", () => import("./features/applications/application-list-page.tsx"), "ApplicationListPage"),
+  page("/members", () => import("./features/members/member-list-page.tsx"), "MemberListPage"),
+  page("/editions", () => import("./features/editions/edition-list-page.tsx"), "EditionListPage"),
   page("/recipes", () => import("./features/recipes/recipe-list-page.tsx"), "RecipeListPage"),
   page("/recipes/new", () => import("./features/recipes/new-recipe-page.tsx"), "NewRecipePage"),
   recipePage,
@@ -42,6 +64,9 @@ const pages: RouteObject[] = [
   page("/machines", () => import("./features/machines/machine-list-page.tsx"), "MachineListPage"),
   page("/machines/new", machines, "NewMachinePage"),
   page("/machines/:id", machines, "MachinePage"),
+  page("/peers", () => import("./features/peers/map-page.tsx"), "PeerMapPage"),
+  page("/peers/book", () => import("./features/peers/book-page.tsx"), "BookAgainstPeersPage"),
+  page("/peers/:groupId", () => import("./features/peers/group-page.tsx"), "PeerGroupPage"),
 ];
 
 /** The route table: the only file that knows every feature. */
