@@ -2,6 +2,7 @@ import pino from "pino";
 import { createApp } from "./app.ts";
 import { openDatabase } from "./db/client.ts";
 import { readSettings } from "./env.ts";
+import { forgetPassedWindows } from "./http/rate-limit.queries.ts";
 import { onStopSignal } from "./process-end.ts";
 
 const settings = readSettings(process.env);
@@ -17,6 +18,11 @@ const server = app.listen(settings.PORT, settings.HOST, (error) => {
   logger.info({ url: settings.PUBLIC_URL }, "listening");
   process.send?.("ready");
 });
+
+const tidyUp = setInterval(() => {
+  forgetPassedWindows(database.db).catch((error: unknown) => logger.warn({ err: error }, "request counts not tidied"));
+}, 3600_000);
+tidyUp.unref();
 
 onStopSignal(async () => {
   await new Promise<void>((resolve) => {
