@@ -3,6 +3,7 @@ import type { ReactNode } from "react";
 import { NavLink } from "react-router-dom";
 import { classNames } from "../ui/class-names.ts";
 import { Toasts } from "../ui/toasts.tsx";
+import { Footer } from "./footer.tsx";
 import { KeyboardShortcuts } from "./keyboard-shortcuts.tsx";
 import { TopBar } from "./top-bar.tsx";
 
@@ -37,10 +38,11 @@ export function AppFrame({ places, corner, demo, children }: AppFrameProps) {
       <main
         id="page"
         tabIndex={-1}
-        className="mx-auto w-full max-w-[77rem] flex-1 px-4 pt-6 pb-24 outline-none md:px-14 md:pt-7 md:pb-16"
+        className="mx-auto w-full max-w-[77rem] flex-1 px-4 pt-6 pb-12 outline-none md:px-14 md:pt-7 md:pb-16"
       >
         {children}
       </main>
+      <Footer aboveBar={places.length > 0} />
       {places.length > 0 ? <BottomBar places={places} /> : null}
       <Toasts />
       <KeyboardShortcuts />
