@@ -8,10 +8,12 @@ export interface FactsBesideProps {
   right: { heading: string; content: RecipeContent };
   units: UnitSystem;
   machineName: (id: string) => string;
+  /** Leaves out what is the same on both sides. */
+  differingOnly?: boolean;
 }
 
 /** Two contents side by side; what differs is marked by a bar and by weight, and said to screen readers. */
-export function FactsBeside({ left, right, units, machineName }: FactsBesideProps) {
+export function FactsBeside({ left, right, units, machineName, differingOnly }: FactsBesideProps) {
   const [before, after] = [left, right].map(({ content }) => contentFacts(content, units, machineName));
   return (
     <table className="w-full table-fixed border-separate border-spacing-0">
@@ -31,6 +33,7 @@ export function FactsBeside({ left, right, units, machineName }: FactsBesideProp
         {before!.map(({ name, value }, i) => {
           const other = after![i]!.value; // both list the same facts
           const differs = value !== other;
+          if (differingOnly && !differs) return null;
           return (
             <tr key={name} className={differs ? "bg-action-soft" : undefined}>
               <th

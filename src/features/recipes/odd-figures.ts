@@ -1,14 +1,17 @@
 import type { Machine } from "#shared/contracts/machines.ts";
 import type { RecipeContent } from "#shared/contracts/recipes.ts";
+import { heatCheck } from "#shared/materials/heat-check.ts";
 import { checkLimits } from "#shared/recipes/limits.ts";
 import { formatWithUnit } from "#shared/units/format.ts";
 import type { UnitSystem } from "#shared/units/units.ts";
 
-/** What is allowed but worth a second look before it is kept: values seldom right, and values the machine cannot give. */
+/** What is allowed but worth a second look: values seldom right, values the machine cannot give, heat that is not there. */
 export function oddFigures(content: RecipeContent, machine: Machine | undefined, units: UnitSystem): string[] {
   const { thicknessMm, nozzleMm, setpoints } = content;
   const seldom = checkLimits({ ...setpoints, thicknessMm, nozzleMm }, units).questions.map(({ detail }) => detail);
-  return [...seldom, ...beyondMachine(content, machine, units)];
+  const heat = heatCheck({ ...setpoints, thicknessMm, material: content.material, gas: content.processGas });
+  const tooCold = heat?.verdict === "impossible" ? [heat.words] : [];
+  return [...seldom, ...beyondMachine(content, machine, units), ...tooCold];
 }
 
 function beyondMachine({ setpoints }: RecipeContent, machine: Machine | undefined, units: UnitSystem): string[] {

@@ -24,7 +24,7 @@ export function RecipeActions({ recipe }: { recipe: Recipe }) {
       )}
       <ButtonLink to={`/recipes/new?copy=${id}`} kind="quiet">
         <Copy aria-hidden="true" size={18} />
-        Copy
+        Copy as new
       </ButtonLink>
       <Button kind="quiet" onClick={() => window.print()}>
         <Printer aria-hidden="true" size={18} />

@@ -3,6 +3,7 @@ import { type Metric, metricDefinitions } from "#shared/recipes/metrics.ts";
 import { formatQuantity, unitLabel } from "#shared/units/format.ts";
 import type { UnitSystem } from "#shared/units/units.ts";
 import { recipeName } from "../../lib/recipe-words.ts";
+import { ButtonLink } from "../../ui/button.tsx";
 import { TextLink } from "../../ui/text-link.tsx";
 import { RecipeStateWord } from "./recipe-state.tsx";
 import { PeersBelow } from "./setpoint-cell.tsx";
@@ -36,6 +37,11 @@ export function RecipeCard({ recipe, units }: { recipe: Recipe; units: UnitSyste
           </div>
         ))}
       </dl>
+      {recipe.state === "retired" ? null : (
+        <ButtonLink to={`/recipes/${recipe.id}/test-cuts/new`} className="mt-4 w-full">
+          Log a test cut
+        </ButtonLink>
+      )}
     </>
   );
 }

@@ -27,7 +27,7 @@ const setpointColumn = ([metric, header]: [Metric, string], units: UnitSystem): 
   cell: (recipe) => <SetpointCell recipe={recipe} metric={metric} units={units} />,
 });
 
-/** @param narrow  leaves out what a small desk has no room for */
+/** @param narrow  for small desks: the machine stands below the metal, the cut height on the recipe's page */
 export function recipeColumns(units: UnitSystem, narrow: boolean): Column<Recipe>[] {
   const columns: Column<Recipe>[] = [
     {
@@ -35,17 +35,22 @@ export function recipeColumns(units: UnitSystem, narrow: boolean): Column<Recipe
       header: "Metal",
       rowHeader: true,
       sortable: true,
-      cell: ({ id, version: { content } }) => (
-        <TextLink to={`/recipes/${id}`} aria-label={recipeName(content, units)}>
-          {materialLabels[content.material]}
-        </TextLink>
+      cell: ({ id, machineName, version: { content } }) => (
+        <>
+          <TextLink to={`/recipes/${id}`} aria-label={recipeName(content, units)}>
+            {materialLabels[content.material]}
+          </TextLink>
+          {narrow ? <span className="block text-sm font-normal text-muted">{machineName}</span> : null}
+        </>
       ),
     },
     {
       key: "thickness",
       header: "Thickness",
       sortable: true,
-      cell: ({ version: { content } }) => formatThickness(content.thicknessMm, content.material, units),
+      cell: ({ version: { content } }) => (
+        <span className="figures">{formatThickness(content.thicknessMm, content.material, units)}</span>
+      ),
     },
     {
       key: "nozzle",
@@ -68,5 +73,5 @@ export function recipeColumns(units: UnitSystem, narrow: boolean): Column<Recipe
     },
     ...headers.map((header) => setpointColumn(header, units)),
   ];
-  return narrow ? columns.filter(({ key }) => key !== "cutHeightMm") : columns;
+  return narrow ? columns.filter(({ key }) => key !== "machine" && key !== "cutHeightMm") : columns;
 }

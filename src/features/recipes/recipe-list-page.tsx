@@ -35,7 +35,7 @@ export function RecipeListPage() {
     <>
       <PageHeader
         title="Recipes"
-        facts="The shop's own book: nobody else sees it"
+        facts="The shop's own book. Only what you share leaves it, and without your name"
         actions={isEmptyBook ? null : <ListActions />}
       />
       {isEmptyBook ? (
@@ -116,7 +116,7 @@ function EmptyBook({ hasMachine }: { hasMachine: boolean }) {
         }
       >
         A recipe belongs to the machine it cuts on.{" "}
-        {shop?.role === "owner" ? "Describe yours; it takes two minutes." : "Ask the owner to describe it."}
+        {shop?.role === "owner" ? "Describe yours first." : "Ask the owner to describe it."}
       </EmptyState>
     );
   }

@@ -26,9 +26,14 @@ export function SetpointStrips({ recipe }: { recipe: Recipe }) {
             name={label}
             unit={unitLabel(quantity, units)}
             figure={value === null ? undefined : formatQuantity(value, quantity, units).text}
-            note={value === null ? "not set" : standingNote(metric, value, figures)}
+            note={noteOn(metric, value, figures)}
           >
-            <MetricStrip metric={metric} figures={figures} own={value} units={units} size="full" />
+            <MetricStrip
+              {...{ metric, figures, units }}
+              own={value}
+              size="full"
+              hideSentence={figures?.status !== "released" || figures.distributions[metric] === null}
+            />
           </StripRow>
         );
       })}
@@ -41,8 +46,11 @@ export function SetpointStrips({ recipe }: { recipe: Recipe }) {
   );
 }
 
-function standingNote(metric: Metric, value: number, figures: PeerGroupFigures | undefined): string | undefined {
-  if (figures?.status !== "released") return undefined;
+/** Where the value stands, or why that is not said. */
+function noteOn(metric: Metric, value: number | null, figures: PeerGroupFigures | undefined): string {
+  if (!figures) return "no edition yet";
+  if (figures.status === "withheld") return figures.reason === "quorum" ? "not enough shops yet" : "held back for now";
   const distribution = figures.distributions[metric];
-  return distribution === null ? "not enough shops yet" : standingOf(metric, value, distribution).word;
+  if (distribution === null) return "not enough shops yet";
+  return value === null ? "not set" : standingOf(metric, value, distribution).word;
 }

@@ -44,7 +44,9 @@ export function StaleDialog({ stale, units, machineName, onAnswer }: StaleDialog
         right={{ heading: "Yours, not saved", content: stale.mine }}
         units={units}
         machineName={machineName}
+        differingOnly
       />
+      <p className="mt-2 text-sm text-muted">Everything else is the same in both.</p>
     </Dialog>
   );
 }

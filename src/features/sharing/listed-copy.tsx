@@ -7,38 +7,46 @@ import type { UnitSystem } from "#shared/units/units.ts";
 import { useSession } from "../../shell/session.queries.ts";
 
 type Listed = NonNullable<SharingPreview["listed"]>;
+type Fact = readonly [name: string, value: string];
 
 /** The nameless copy, field by field, as members would come to read it. */
 export function ListedCopy({ listed }: { listed: Listed }) {
   const { units } = useSession();
-  const traits = traitWords(listed);
+  const traits = traitFacts(listed);
   return (
     <>
-      <dl>
-        {copyFacts(listed, units).map(([name, value]) => (
-          <div key={name} className="grid grid-cols-[8.5rem_1fr] gap-3 border-t border-line py-1.5 text-sm">
-            <dt className="text-muted">{name}</dt>
-            <dd className="min-w-0 break-words">{value}</dd>
-          </div>
-        ))}
-      </dl>
+      <Facts facts={copyFacts(listed, units)} />
       {traits.length > 0 ? (
-        <p className="border-t border-line pt-2 text-sm">
-          Of the machine, and only where enough shops have the same: {traits.join(", ")}.
-        </p>
+        <>
+          <p className="mt-3 mb-2 text-sm">Of the machine, and only where enough shops have the same:</p>
+          <Facts facts={traits} />
+        </>
       ) : null}
     </>
   );
 }
 
-function copyFacts(listed: Listed, units: UnitSystem): [string, string][] {
+function Facts({ facts }: { facts: readonly Fact[] }) {
+  return (
+    <dl>
+      {facts.map(([name, value]) => (
+        <div key={name} className="grid grid-cols-[8.5rem_1fr] gap-3 border-t border-line py-1.5 text-sm">
+          <dt className="text-muted">{name}</dt>
+          <dd className="min-w-0 break-words">{value}</dd>
+        </div>
+      ))}
+    </dl>
+  );
+}
+
+function copyFacts(listed: Listed, units: UnitSystem): Fact[] {
   const [year, quarter] = listed.quarter.split("-Q");
   return [
     ["Metal", materialLabels[listed.material]],
     ["Thickness", formatWithUnit(listed.thicknessMm, "thickness", units)],
     ["Nozzle", formatWithUnit(listed.nozzleMm, "nozzle", units)],
     ["Gas", processGasLabels[listed.gas]],
-    ...metrics.flatMap((metric): [string, string][] => {
+    ...metrics.flatMap((metric): Fact[] => {
       const value = listed.setpoints[metric];
       const { label, quantity } = metricDefinitions[metric];
       return value === null ? [] : [[label, formatWithUnit(value, quantity, units)]];
@@ -48,10 +56,10 @@ function copyFacts(listed: Listed, units: UnitSystem): [string, string][] {
   ];
 }
 
-function traitWords({ traits: { startMethod, dryness, heightControl } }: Listed): string[] {
+function traitFacts({ traits: { startMethod, dryness, heightControl } }: Listed): Fact[] {
   return [
-    startMethod && `start of the arc (${startMethodLabels[startMethod].toLowerCase()})`,
-    dryness && `drying of the air (${drynessLabels[dryness].toLowerCase()})`,
-    heightControl && `height control (${heightControlLabels[heightControl].toLowerCase()})`,
-  ].filter((words) => words !== null);
+    ...(startMethod ? [["Start of the arc", startMethodLabels[startMethod]] as const] : []),
+    ...(dryness ? [["Drying of the air", drynessLabels[dryness]] as const] : []),
+    ...(heightControl ? [["Height control", heightControlLabels[heightControl]] as const] : []),
+  ];
 }

@@ -47,7 +47,7 @@ function Seen({ preview }: { preview: SharingPreview }) {
       </p>
       {preview.listed ? (
         <>
-          <p className="mt-2 mb-2">Besides, this copy, without a name and never in the order of shops:</p>
+          <p className="mt-2 mb-2">Besides, a rounded copy without a name:</p>
           <ListedCopy listed={preview.listed} />
         </>
       ) : null}

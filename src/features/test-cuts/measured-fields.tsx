@@ -1,4 +1,4 @@
-import type { ReactNode } from "react";
+import { type ReactNode, useState } from "react";
 import { type Control, type FieldPath, useWatch } from "react-hook-form";
 import type { TestCutInput } from "#shared/contracts/test-cuts.ts";
 import { perpendicularityRange, type QualityRange, roughnessRange } from "#shared/cut-quality/iso9013.ts";
@@ -83,8 +83,14 @@ export function MeasuredFields({ control, field, units, thicknessMm }: MeasuredF
 }
 
 function Folded({ open, children }: { open: boolean; children: ReactNode }) {
+  // Stays open once opened: emptying a field to type it anew must not take it away.
+  const [opened, setOpened] = useState(open);
   return (
-    <details open={open || undefined} className="rounded border border-line-strong bg-surface">
+    <details
+      open={open || opened}
+      onToggle={(event) => setOpened(event.currentTarget.open)}
+      className="rounded border border-line-strong bg-surface"
+    >
       <summary className="flex min-h-touch items-center px-4 font-bold text-action">
         Add what you measured<span className="font-normal text-muted">&nbsp;(optional)</span>
       </summary>

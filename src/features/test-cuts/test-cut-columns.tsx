@@ -16,16 +16,35 @@ export function testCutColumns(units: UnitSystem): Column<TestCut>[] {
       rowHeader: true,
       cell: (cut) => <TextLink to={`/recipes/${cut.recipeId}`}>{recipeName(cut, units)}</TextLink>,
     },
-    { key: "machine", header: "Machine", cell: (cut) => `${cut.machineName}, version ${cut.versionNumber}` },
+    {
+      key: "machine",
+      header: "Machine",
+      cell: (cut) => (
+        <>
+          {cut.machineName}
+          <span className="block text-sm text-muted">Version {cut.versionNumber}</span>
+        </>
+      ),
+    },
     { key: "outcome", header: "Outcome", cell: (cut) => <TestCutVerdict acceptable={cut.acceptable} /> },
     { key: "dross", header: "Dross", cell: (cut) => (cut.cutThrough ? drossLabels[cut.dross] : "Not cut through") },
     { key: "edge", header: "Top edge", cell: (cut) => topEdgeLabels[cut.topEdge] },
     {
       key: "measured",
       header: "Measured",
-      cell: (cut) => <span className="text-sm">{measuredWords(cut, units).join(", ") || "–"}</span>,
+      cell: (cut) => <Measured words={measuredWords(cut, units)} />,
     },
   ];
+}
+
+/** One to a line: a figure parted from its unit is misread. */
+function Measured({ words }: { words: readonly string[] }) {
+  if (words.length === 0) return "–";
+  return words.map((word) => (
+    <span key={word} className="block text-sm whitespace-nowrap">
+      {word}
+    </span>
+  ));
 }
 
 export function TestCutCard({ cut, units }: { cut: TestCut; units: UnitSystem }) {

@@ -37,7 +37,17 @@ export function TestCutListPage() {
 
   return (
     <>
-      <PageHeader title="Test cuts" facts="What was cut to try a recipe, newest first" />
+      <PageHeader
+        title="Test cuts"
+        facts="What was cut to try a recipe, newest first"
+        actions={
+          nothingYet ? null : (
+            <ButtonLink to="/recipes" data-new="">
+              Choose a recipe to log one
+            </ButtonLink>
+          )
+        }
+      />
       {nothingYet ? (
         <EmptyState title="No test cut yet" action={<ButtonLink to="/recipes">Choose a recipe</ButtonLink>}>
           Open the recipe you cut with and log what you see: through or not, dross, top edge, good enough or not.
