@@ -67,6 +67,7 @@ const pages: RouteObject[] = [
   page("/peers", () => import("./features/peers/map-page.tsx"), "PeerMapPage"),
   page("/peers/book", () => import("./features/peers/book-page.tsx"), "BookAgainstPeersPage"),
   page("/peers/:groupId", () => import("./features/peers/group-page.tsx"), "PeerGroupPage"),
+  page("/start", () => import("./features/starting-recipes/start-page.tsx"), "StartPage"),
 ];
 
 /** The route table: the only file that knows every feature. */
