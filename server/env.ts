@@ -1,26 +1,37 @@
 import { z } from "zod";
 
-const flag = z.enum(["0", "1"]).default("0").transform((value) => value === "1");
+const flag = z
+  .enum(["0", "1"])
+  .default("0")
+  .transform((value) => value === "1");
 
 /** Every setting of the API process: read once, refused at once when wrong. README lists them. */
-const Settings = z.object({
-  NODE_ENV: z.enum(["development", "test", "production"]).default("production"),
-  HOST: z.string().default("127.0.0.1"),
-  PORT: z.coerce.number().int().min(0).max(65_535).default(4300),
-  PUBLIC_URL: z.url().transform((url) => new URL(url).origin),
-  DATABASE_URL: z.string().min(1).describe("PostgreSQL as role web"),
-  DATABASE_POOL: z.coerce.number().int().min(1).max(200).default(10),
-  SESSION_SECRET: z.string().min(32, "needs 32 characters or more"),
-  OIDC_ISSUER: z.url(),
-  OIDC_CLIENT_ID: z.string().min(1),
-  OIDC_CLIENT_SECRET: z.string().min(1),
-  OIDC_PROVIDER_NAME: z.string().min(1).optional(),
-  TRUST_PROXY: z.coerce.number().int().min(0).max(5).default(0),
-  RATE_LIMIT_PER_MINUTE: z.coerce.number().int().min(1).default(600),
-  WEB_DIR: z.string().default("dist/web"),
-  DEMO: flag,
-  LOG_LEVEL: z.enum(["fatal", "error", "warn", "info", "debug", "silent"]).default("info"),
-});
+const Settings = z
+  .object({
+    NODE_ENV: z.enum(["development", "test", "production"]).default("production"),
+    HOST: z.string().default("127.0.0.1"),
+    PORT: z.coerce.number().int().min(0).max(65_535).default(4300),
+    PUBLIC_URL: z.url().transform((url) => new URL(url).origin),
+    DATABASE_URL: z.string().min(1).describe("PostgreSQL as role web"),
+    DATABASE_POOL: z.coerce.number().int().min(1).max(200).default(10),
+    SESSION_SECRET: z.string().min(32, "needs 32 characters or more"),
+    OIDC_ISSUER: z.url(),
+    OIDC_CLIENT_ID: z.string().min(1),
+    OIDC_CLIENT_SECRET: z.string().min(1),
+    OIDC_PROVIDER_NAME: z.string().min(1).optional(),
+    TRUST_PROXY: z.coerce.number().int().min(0).max(5).default(0),
+    RATE_LIMIT_PER_MINUTE: z.coerce.number().int().min(1).default(600),
+    WEB_DIR: z.string().default("dist/web"),
+    DEMO: flag,
+    LOG_LEVEL: z.enum(["fatal", "error", "warn", "info", "debug", "silent"]).default("info"),
+  })
+  .check(
+    // The process speaks plain HTTP, so https means a proxy; unless it is trusted no secure cookie is set and nobody can sign in.
+    z.refine((settings) => settings.TRUST_PROXY > 0 || !settings.PUBLIC_URL.startsWith("https:"), {
+      path: ["TRUST_PROXY"],
+      error: "an https PUBLIC_URL needs the number of proxies in front, 1 or more",
+    }),
+  );
 export type Settings = z.infer<typeof Settings>;
 
 export function readSettings(environment: NodeJS.ProcessEnv): Settings {

@@ -2,6 +2,7 @@ import pino from "pino";
 import { createApp } from "./app.ts";
 import { openDatabase } from "./db/client.ts";
 import { readSettings } from "./env.ts";
+import { forgetOldAnswers } from "./http/idempotency.queries.ts";
 import { forgetPassedWindows } from "./http/rate-limit.queries.ts";
 import { onStopSignal } from "./process-end.ts";
 
@@ -20,7 +21,9 @@ const server = app.listen(settings.PORT, settings.HOST, (error) => {
 });
 
 const tidyUp = setInterval(() => {
-  forgetPassedWindows(database.db).catch((error: unknown) => logger.warn({ err: error }, "request counts not tidied"));
+  Promise.all([forgetPassedWindows(database.db), forgetOldAnswers(database.db)]).catch((error: unknown) =>
+    logger.warn({ err: error }, "old request counts and answers not tidied"),
+  );
 }, 3600_000);
 tidyUp.unref();
 

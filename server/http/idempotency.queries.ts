@@ -1,4 +1,4 @@
-import { and, eq } from "drizzle-orm";
+import { and, eq, sql } from "drizzle-orm";
 import type { Db } from "#server/db/client.ts";
 import { idempotencyKeys } from "#server/db/schema/sessions.ts";
 
@@ -42,4 +42,8 @@ export async function rememberAnswer(
     .update(idempotencyKeys)
     .set({ status, response })
     .where(and(eq(idempotencyKeys.userId, userId), eq(idempotencyKeys.key, key)));
+}
+
+export async function forgetOldAnswers(db: Db): Promise<void> {
+  await db.execute(sql`select forget_old_answers()`);
 }

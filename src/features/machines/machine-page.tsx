@@ -25,7 +25,7 @@ export function NewMachinePage() {
         onSave={async (input, key) => {
           await save.mutateAsync({ input, key });
           showToast(`${input.name} is kept.`);
-          navigate("/machines");
+          await navigate("/machines");
         }}
       />
     </>
