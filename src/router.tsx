@@ -68,6 +68,8 @@ const pages: RouteObject[] = [
   page("/peers/book", () => import("./features/peers/book-page.tsx"), "BookAgainstPeersPage"),
   page("/peers/:groupId", () => import("./features/peers/group-page.tsx"), "PeerGroupPage"),
   page("/start", () => import("./features/starting-recipes/start-page.tsx"), "StartPage"),
+  page("/method", () => import("./features/about/method-page.tsx"), "MethodPage"),
+  page("/cautions", () => import("./features/about/cautions-page.tsx"), "CautionsPage"),
 ];
 
 /** The route table: the only file that knows every feature. */

@@ -48,18 +48,20 @@ export function Questions({ url, change, answers, machines, units }: QuestionsPr
         read={reading(rule)}
       />
       <NozzleQuestion url={url} change={change} units={units} />
-      <SelectField
-        label="Machine"
-        value={machine.id}
-        onChange={(event) => change({ machine: event.target.value })}
-        choices={machines.map(({ id, name }) => ({ value: id, label: name }))}
-      />
-      <SelectField
-        label="Process gas"
-        value={gas}
-        onChange={(event) => change({ gas: event.target.value })}
-        choices={processGases.map((value) => ({ value, label: processGasLabels[value] }))}
-      />
+      <div className="grid grid-cols-2 gap-4 lg:grid-cols-1 lg:gap-5">
+        <SelectField
+          label="Machine"
+          value={machine.id}
+          onChange={(event) => change({ machine: event.target.value })}
+          choices={machines.map(({ id, name }) => ({ value: id, label: name }))}
+        />
+        <SelectField
+          label="Process gas"
+          value={gas}
+          onChange={(event) => change({ gas: event.target.value })}
+          choices={processGases.map((value) => ({ value, label: processGasLabels[value] }))}
+        />
+      </div>
       <p className="text-sm text-muted">
         <TextLink to="/method#starting">How the numbers come about</TextLink> ·{" "}
         <TextLink to="/cautions">Cautions</TextLink>

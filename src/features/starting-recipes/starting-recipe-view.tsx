@@ -4,6 +4,7 @@ import type { StartingRecipe } from "#shared/contracts/starting-recipe-figures.t
 import { materialLabels, processGasLabels } from "#shared/materials/materials.ts";
 import { formatDate } from "#shared/units/dates.ts";
 import { formatThickness, formatWithUnit } from "#shared/units/format.ts";
+import { CautionsLine } from "../../lib/cautions.tsx";
 import { useSession } from "../../shell/session.queries.ts";
 import { classNames } from "../../ui/class-names.ts";
 import { Notice } from "../../ui/notice.tsx";
@@ -29,6 +30,9 @@ export function StartingRecipeView({ recipe, machine, behind, actions }: Startin
       className={classNames("space-y-6 transition-opacity print:space-y-3", behind && "opacity-55")}
     >
       <Heading recipe={recipe} machine={machine} />
+      <div className="print:hidden">
+        <CautionsLine material={recipe.material} gas={recipe.gas} currentA={recipe.setpoints.currentA.high} />
+      </div>
       {actions}
       <LimitsAndHeat recipe={recipe} />
       <SetpointList setpoints={recipe.setpoints} units={units} />
