@@ -164,7 +164,7 @@ function inventCuts(random: Random, plan: BookPlan, version: New<typeof recipeVe
       shopId: plan.shopId,
       recipeId: version.recipeId,
       versionNumber: version.number,
-      cutAt: new Date(version.changedAt!.getTime() + (i + 1) * 3600_000 * random.whole(1, 20)),
+      cutAt: new Date(version.changedAt!.getTime() + ((i + 1) * 24 + random.whole(0, 9)) * 3600_000),
       cutThrough: good || random.chance(0.8),
       dross: good ? random.pick(["none", "none", "light"]) : random.pick(["moderate", "heavy", "light"]),
       topEdge: good
@@ -178,5 +178,5 @@ function inventCuts(random: Random, plan: BookPlan, version: New<typeof recipeVe
       note: "",
       recordedBy: random.pick(plan.people),
     };
-  }).sort((a, b) => a.cutAt.getTime() - b.cutAt.getTime());
+  });
 }

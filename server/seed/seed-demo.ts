@@ -31,7 +31,13 @@ const knownShops: readonly KnownShop[] = [
     // Left for whoever looks over the demo to start on.
     avoid: ["aluminium"],
   },
-  { name: "Fernlatch Yard", place: "West Fernlatch", people: [person("demo-new-owner", "owner")], kind: "just-joined", habit: "metric" },
+  {
+    name: "Fernlatch Yard",
+    place: "West Fernlatch",
+    people: [person("demo-new-owner", "owner")],
+    kind: "just-joined",
+    habit: "metric",
+  },
   {
     name: "Quillmoor Cutting",
     place: "Old Quillmoor",

@@ -49,7 +49,8 @@ export function bandLabel(bandIndex: number): string {
 
 /** Nominal orifice to 0.1 mm: what makers print differs by less than they machine. */
 export function nozzleStep(nozzleMm: number): number {
-  return Math.round(nozzleMm * 10) / 10;
+  // 2.55 * 10 is a hair under 25.5 in binary; PostgreSQL, which groups contributions, rounds the decimal that was typed.
+  return Math.round(Number((nozzleMm * 10).toPrecision(12))) / 10;
 }
 
 export function peerGroupOf(subject: PeerGroupSubject): PeerGroupKey {

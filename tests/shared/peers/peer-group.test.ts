@@ -103,5 +103,6 @@ describe("group ids", () => {
 
   test("nozzles a few hundredths apart share a group", () => {
     expect([0.76, 0.8, 0.84].map(nozzleStep)).toEqual([0.8, 0.8, 0.8]);
+    expect([0.85, 2.55].map(nozzleStep), "as the typed decimal rounds, not its binary neighbour").toEqual([0.9, 2.6]);
   });
 });
