@@ -21,8 +21,26 @@ export interface SignedIn {
   returnTo: string;
 }
 
+type TokenDone = (error: unknown, ...tokens: unknown[]) => void;
+
 interface TokenClient {
-  getOAuthAccessToken(code: string, params: Record<string, string>, done: unknown): void;
+  getOAuthAccessToken(code: string, params: Record<string, string>, done: TokenDone): void;
+}
+
+/** Milliseconds. The library itself would wait for ever where a provider takes the question and never answers. */
+const tokenPatience = 8000;
+
+/** Calls back once: with the answer, or without one when it takes too long. */
+function within(milliseconds: number, done: TokenDone): TokenDone {
+  let isOpen = true;
+  const settle: TokenDone = (...answer) => {
+    clearTimeout(timer);
+    if (isOpen) done(...answer);
+    isOpen = false;
+  };
+  const late = () => settle(Object.assign(new Error("the sign-in provider did not answer"), { code: "ETIMEDOUT" }));
+  const timer = setTimeout(late, milliseconds);
+  return settle;
 }
 
 /** The parts of passport-openidconnect used here; its published types leave most of them out. */
@@ -65,8 +83,10 @@ class PkceStrategy extends Base {
     this.request = req;
     const client = this._oauth2;
     this._oauth2 = Object.assign(Object.create(client) as TokenClient, {
-      getOAuthAccessToken: (code: string, params: Record<string, string>, done: unknown) =>
-        client.getOAuthAccessToken(code, { ...params, code_verifier: signIns.get(req)?.verifier ?? "" }, done),
+      getOAuthAccessToken: (code: string, params: Record<string, string>, done: TokenDone) => {
+        const withVerifier = { ...params, code_verifier: signIns.get(req)?.verifier ?? "" };
+        client.getOAuthAccessToken(code, withVerifier, within(tokenPatience, done));
+      },
     });
     super.authenticate(req, options);
   }
