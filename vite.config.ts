@@ -49,9 +49,11 @@ export default defineConfig({
         test: {
           name: "e2e",
           include: ["tests/e2e/**/*.test.ts"],
+          globalSetup: ["tests/support/e2e-setup.ts"],
           env: { TZ: "UTC" },
-          testTimeout: 120_000,
+          testTimeout: 240_000,
           hookTimeout: 180_000,
+          expect: { poll: { timeout: 15_000, interval: 100 } },
           fileParallelism: false,
           sequence: { groupOrder: 1 },
         },
