@@ -1,6 +1,5 @@
-import { Fragment } from "react";
 import type { Caution } from "#shared/contracts/starting-recipe-figures.ts";
-import { materialLabels, materials, processGases, processGasLabels } from "#shared/materials/materials.ts";
+import { materialLabels, materials, processGases } from "#shared/materials/materials.ts";
 import { cautionsFor } from "#shared/safety/cautions.ts";
 import { Notice } from "../../ui/notice.tsx";
 import { PageHeader } from "../../ui/page-header.tsx";
@@ -25,17 +24,15 @@ export function CautionsPage() {
         {cautionParts().map(({ title, cautions }) => (
           <section key={title} data-keep-together="">
             <h2 className="text-lg font-black">{title}</h2>
-            <dl className="mt-1 grid gap-x-10 md:grid-cols-[13rem_1fr]">
-              {cautions.map((caution) => (
-                <Fragment key={caution.id}>
-                  <dt className="border-t border-line pt-3 font-bold">{caution.title}</dt>
-                  <dd className="pb-3 md:border-t md:border-line md:pt-3">
-                    <p className="max-w-text">{caution.text}</p>
-                    {caution.standards.length > 0 ? (
-                      <p className="text-sm text-muted">{caution.standards.join(", ")}</p>
-                    ) : null}
+            <dl className="mt-1 border-t border-line">
+              {cautions.map(({ id, title: name, text, standards }) => (
+                <div key={id} className="grid gap-x-10 border-b border-line py-3 md:grid-cols-[13rem_1fr]">
+                  <dt className="font-bold">{name}</dt>
+                  <dd>
+                    <p className="max-w-text">{text}</p>
+                    {standards.length > 0 ? <p className="text-sm text-muted">{standards.join(", ")}</p> : null}
                   </dd>
-                </Fragment>
+                </div>
               ))}
             </dl>
           </section>
@@ -52,13 +49,12 @@ function cautionParts(): Part[] {
   const holdsFor = (caution: Caution) => ofMetal.filter(({ all }) => all.some(({ text }) => text === caution.text));
   const always = ofMetal[0]!.all.filter((caution) => holdsFor(caution).length === materials.length);
   const added = (cautions: readonly Caution[]) => cautions.filter(({ text }) => !always.some((a) => a.text === text));
-  const gasAdds = processGases.map((gas) => ({
-    title: processGasLabels[gas],
-    cautions: added(cautionsFor({ ...base, gas })).filter(({ id }) => id !== "fumes"),
-  }));
+  const ofGases = processGases.flatMap((gas) =>
+    added(cautionsFor({ ...base, gas })).filter(({ id }) => id !== "fumes"),
+  );
   return [
     { title: "Always", cautions: always },
     ...ofMetal.map(({ material, all }) => ({ title: materialLabels[material], cautions: added(all) })),
-    ...gasAdds.filter(({ cautions }) => cautions.length > 0),
+    { title: "Other gases than air", cautions: ofGases },
   ];
 }

@@ -60,7 +60,7 @@ const fixed = [
   ],
   [
     "Namelessness",
-    "A listed recipe carries no shop, person, machine or date, only the quarter of the year, under a random name that links it to nothing. Words are shown only if the owner typed them for others; they are searched for names, addresses, numbers and links first.",
+    "A listed recipe carries no shop, person, machine or date, only the quarter of the year, under a random number that leads nowhere. Words are shown only if the owner typed them for others; they are searched for names, addresses, phone numbers and links first.",
   ],
 ] as const;
 

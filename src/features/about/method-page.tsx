@@ -27,7 +27,7 @@ export function MethodPage() {
           <p>
             p50 is the middle: half of the shops set less, half more. Between p25 and p75 lies the middle half, between
             p10 and p90 eight in ten. They are Harrell-Davis estimates, an average over neighbouring values, so no
-            figure equals what one shop set. A lone value far outside is drawn in first, so that a slip of the keyboard
+            figure is taken from one shop. A lone value far outside is drawn in first, so that a slip of the keyboard
             cannot move a small group. Feed and kerf are worked out on a log scale, because they differ by factors.
           </p>
           <p>

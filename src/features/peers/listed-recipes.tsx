@@ -26,7 +26,7 @@ export function ListedRecipes({ recipes, groupKey }: { recipes: readonly ListedR
             Shown by their owners, without names, rounded and dated to the quarter. Ordered by their figures.
           </p>
           <CautionsLine material={groupKey.material} gas={groupKey.gas} currentA={highestCurrent(recipes)} />
-          <div className="mt-3">
+          <div className="mt-3 print:[&_.min-w-40]:min-w-0 print:[&_table]:text-sm print:[&_td]:px-1 print:[&_th]:px-1">
             <Table
               caption="Listed recipes"
               columns={columnsFor(units)}

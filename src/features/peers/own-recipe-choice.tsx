@@ -4,6 +4,7 @@ import { formatThickness } from "#shared/units/format.ts";
 import type { UnitSystem } from "#shared/units/units.ts";
 import { recipeStateLabels } from "../../lib/recipe-words.ts";
 import { useSession } from "../../shell/session.queries.ts";
+import { classNames } from "../../ui/class-names.ts";
 import { PunchMark } from "../../ui/punch-mark.tsx";
 import { SelectField } from "../../ui/select-field.tsx";
 import { TextLink } from "../../ui/text-link.tsx";
@@ -18,21 +19,23 @@ export interface OwnRecipeChoiceProps {
 export function OwnRecipeChoice({ recipes, chosen, onChoose }: OwnRecipeChoiceProps) {
   const { units } = useSession();
   if (!chosen) return null;
-  if (recipes.length > 1) {
-    return (
-      <SelectField
-        label="Your recipe on the strips"
-        className="max-w-lg"
-        value={chosen.id}
-        onChange={(event) => onChoose(event.target.value)}
-        choices={recipes.map((recipe) => ({ value: recipe.id, label: nameOf(recipe, units) }))}
-      />
-    );
-  }
+  const isOneOfMany = recipes.length > 1;
   return (
-    <p className="text-soft">
-      <PunchMark size={18} /> is your recipe: <TextLink to={`/recipes/${chosen.id}`}>{nameOf(chosen, units)}</TextLink>
-    </p>
+    <>
+      {isOneOfMany ? (
+        <SelectField
+          label="Your recipe on the strips"
+          className="max-w-lg print:hidden"
+          value={chosen.id}
+          onChange={(event) => onChoose(event.target.value)}
+          choices={recipes.map((recipe) => ({ value: recipe.id, label: nameOf(recipe, units) }))}
+        />
+      ) : null}
+      <p className={classNames("text-soft", isOneOfMany && "hidden print:block")}>
+        <PunchMark size={18} /> is your recipe:{" "}
+        <TextLink to={`/recipes/${chosen.id}`}>{nameOf(chosen, units)}</TextLink>
+      </p>
+    </>
   );
 }
 

@@ -2,6 +2,7 @@ import { basisLabels, type StartingRecipe, type StartingSetpoint } from "#shared
 import { type Metric, metricDefinitions, metrics } from "#shared/recipes/metrics.ts";
 import { formatQuantity, unitLabel } from "#shared/units/format.ts";
 import type { UnitSystem } from "#shared/units/units.ts";
+import { classNames } from "../../ui/class-names.ts";
 
 /** The numbers to dial in, each with its range and what it stands on. */
 export function SetpointList({ setpoints, units }: { setpoints: StartingRecipe["setpoints"]; units: UnitSystem }) {
@@ -26,29 +27,37 @@ function SetpointRow({ metric, setpoint, units }: SetpointRowProps) {
   const { label } = metricDefinitions[metric];
   const isKnown = setpoint.value !== null;
   return (
-    <li className="grid grid-cols-[1fr_auto] gap-x-4 gap-y-1 border-t border-line py-3 last:border-b md:grid-cols-[8rem_9.5rem_minmax(0,1fr)] md:gap-x-6 print:grid-cols-[8rem_9.5rem_minmax(0,1fr)] print:py-0.5">
-      <h3 className="font-bold md:pt-0.5">{label}</h3>
-      <div className="text-right">
-        <p className="figures text-xl font-black print:text-lg">
+    <li className={rowClasses}>
+      <h3 className="font-bold md:pt-0.5 print:pt-0">{label}</h3>
+      <div className="text-right print:contents">
+        <p className="figures text-xl font-black print:text-right print:text-base">
           {valueText(setpoint, metric, units)}{" "}
           {isKnown ? <span className="text-sm font-normal text-muted">{unitOf(metric, units)}</span> : null}
         </p>
-        {isKnown ? <p className="figures text-sm text-soft">{rangeText(setpoint, metric, units)}</p> : null}
+        <p className="figures text-sm text-soft print:text-left">{rangeText(setpoint, metric, units)}</p>
       </div>
-      <div className="col-span-2 md:col-span-1 md:pt-0.5 print:col-span-1">
+      <div className="col-span-2 md:col-span-1 md:pt-0.5 print:col-span-1 print:pt-0 print:text-sm">
         <p>{basisWords(setpoint)}</p>
-        {isKnown ? (
-          <Steps setpoint={setpoint} />
-        ) : (
-          setpoint.steps.map(({ text }) => (
-            <p key={text} className="text-sm text-soft">
-              {text}
-            </p>
-          ))
-        )}
+        {isKnown ? <Steps setpoint={setpoint} /> : <Test setpoint={setpoint} />}
       </div>
     </li>
   );
+}
+
+/** On paper one line a setpoint: name, value, range, what it stands on. */
+const rowClasses = classNames(
+  "grid grid-cols-[1fr_auto] gap-x-4 gap-y-1 border-t border-line py-3 last:border-b",
+  "md:grid-cols-[8rem_9.5rem_minmax(0,1fr)] md:gap-x-6",
+  "print:grid-cols-[7rem_7rem_10rem_minmax(0,1fr)] print:items-baseline print:gap-x-4 print:py-px",
+);
+
+/** The test that finds what nobody knows. */
+function Test({ setpoint: { steps } }: { setpoint: StartingSetpoint }) {
+  return steps.map(({ text }) => (
+    <p key={text} className="text-sm text-soft print:leading-tight">
+      {text}
+    </p>
+  ));
 }
 
 function Steps({ setpoint: { steps } }: { setpoint: StartingSetpoint }) {

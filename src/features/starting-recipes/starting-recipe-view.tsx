@@ -27,7 +27,7 @@ export function StartingRecipeView({ recipe, machine, behind, actions }: Startin
   return (
     <article
       aria-label="Starting recipe"
-      className={classNames("space-y-6 transition-opacity print:space-y-3", behind && "opacity-55")}
+      className={classNames("space-y-6 transition-opacity print:space-y-2", behind && "opacity-55")}
     >
       <Heading recipe={recipe} machine={machine} />
       <div className="print:hidden">
@@ -52,7 +52,7 @@ function Heading({ recipe, machine }: Pick<StartingRecipeViewProps, "recipe" | "
     <header>
       <h2 className="text-xl font-black">{title}</h2>
       <p className="text-muted">{[processGasLabels[gas].toLowerCase(), machine.name, source].join(" · ")}</p>
-      <p className="mt-2 max-w-text">
+      <p className="mt-2 max-w-text print:mt-1 print:max-w-none print:text-sm">
         <b>Nozzle:</b> {nozzle.reason}{" "}
         {groupId ? (
           <TextLink to={`/peers/${groupId}`} className="print:hidden">
@@ -77,7 +77,7 @@ function LimitsAndHeat({ recipe: { limits, heatCheck } }: { recipe: StartingReci
         </Notice>
       ) : null}
       {heatCheck === null ? null : heatCheck.verdict === "plausible" ? (
-        <p className="max-w-text text-soft">
+        <p className="max-w-text text-soft print:max-w-none print:text-sm">
           <b>Heat check:</b> {heatCheck.words}
         </p>
       ) : (

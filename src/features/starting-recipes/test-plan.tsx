@@ -11,11 +11,11 @@ export function TestPlan({ steps, units }: { steps: readonly TestPlanStep[]; uni
       <h2 id="test-plan" className="text-lg font-black">
         First test plan
       </h2>
-      <p className="max-w-text text-soft">
+      <p className="max-w-text text-soft print:text-sm">
         {coupons} coupons in all. One setpoint changes at a time, in an order in which each step leans on the one
         before.
       </p>
-      <ol className="mt-3 space-y-3 print:columns-2 print:space-y-1 print:text-sm">
+      <ol className="mt-3 space-y-3 print:mt-1 print:columns-2 print:space-y-1 print:text-sm print:leading-tight">
         {steps.map((step) => (
           <Step key={step.order} step={step} units={units} />
         ))}
@@ -35,9 +35,9 @@ function Step({ step, units }: { step: TestPlanStep; units: UnitSystem }) {
           {step.title}
           {step.coupons > 0 ? <span className="font-normal text-muted"> · {couponWords(step.coupons)}</span> : null}
         </h3>
-        <p>{step.instruction}</p>
-        {step.levels.length > 0 ? <p className="font-bold">{levelWords(step, units)}</p> : null}
-        <p className="text-soft">Go on when: {lowerFirst(step.keepWhen)}</p>
+        <p className="print:inline">{step.instruction} </p>
+        {step.levels.length > 0 ? <p className="font-bold print:inline">{levelWords(step, units)}. </p> : null}
+        <p className="text-soft print:inline">Go on when: {lowerFirst(step.keepWhen)}</p>
       </div>
     </li>
   );
