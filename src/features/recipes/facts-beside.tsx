@@ -44,7 +44,12 @@ export function FactsBeside({ left, right, units, machineName, differingOnly }: 
                 )}
               >
                 {name}
-                {differs ? <span className="sr-only"> (differs)</span> : null}
+                {differs ? (
+                  <>
+                    {" "}
+                    <span className="sr-only">(differs)</span>
+                  </>
+                ) : null}
               </th>
               {[value, other].map((text, side) => (
                 <td
