@@ -1,6 +1,7 @@
 import { z } from "zod";
 import { materials, processGases, surfaces } from "../materials/materials.ts";
 import { metricDefinitions, nozzleRangeMm, thicknessRangeMm } from "../recipes/metrics.ts";
+import { bookFiles } from "./book-files.ts";
 import { defineEndpoint, IdParams, PageQuery, pageOf } from "./endpoint.ts";
 
 export const recipeStates = ["draft", "proven", "retired"] as const;
@@ -194,7 +195,7 @@ export type BookExport = z.infer<typeof BookExport>;
 
 export const exportBookJson = defineEndpoint({
   method: "get",
-  path: "/api/book.json",
+  path: bookFiles.json,
   summary: "The shop's book with every version, as JSON",
   access: "operator",
   response: BookExport,
@@ -202,7 +203,7 @@ export const exportBookJson = defineEndpoint({
 
 export const exportBookCsv = defineEndpoint({
   method: "get",
-  path: "/api/book.csv",
+  path: bookFiles.csv,
   summary: "The shop's book as it stands, as CSV (RFC 4180), stored units",
   access: "operator",
   response: z.string(),

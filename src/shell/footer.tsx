@@ -16,7 +16,7 @@ export function Footer({ aboveBar }: { aboveBar: boolean }) {
         aboveBar && "pb-[calc(3.5rem+env(safe-area-inset-bottom))]",
       )}
     >
-      <nav aria-label="About" className="mx-auto flex w-full max-w-[70.25rem] flex-wrap gap-x-6 py-2 text-sm">
+      <nav aria-label="About" className="mx-auto flex w-full max-w-page flex-wrap gap-x-6 py-2 text-sm">
         {links.map(({ label, to }) => (
           <Link
             key={to}

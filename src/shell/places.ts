@@ -1,6 +1,6 @@
 import { BookOpen, ChartNoAxesColumn, ClipboardCheck, Compass, Inbox, Library, Users } from "lucide-react";
 import type { Session } from "#shared/contracts/accounts.ts";
-import { exportBookCsv, exportBookJson } from "#shared/contracts/recipes.ts";
+import { bookFiles } from "#shared/contracts/book-files.ts";
 import type { Place } from "./app-frame.tsx";
 import type { MenuLink } from "./shop-menu.tsx";
 
@@ -29,8 +29,8 @@ export function menuLinksFor(session: Pick<Session, "shop" | "admin">): readonly
   if (session.shop?.state !== "active") return network;
   return [
     { label: "Machines", to: "/machines" },
-    { label: "Export the book (table)", to: exportBookCsv.path, download: true },
-    { label: "Export the book (whole)", to: exportBookJson.path, download: true },
+    { label: "Export the book (table)", to: bookFiles.csv, download: true },
+    { label: "Export the book (whole)", to: bookFiles.json, download: true },
     ...network,
   ];
 }

@@ -30,13 +30,15 @@ export function useApply() {
   });
 }
 
+/* Below, the lists are refreshed but not waited for: a dialog closes itself before the row it stands in moves away. */
+
 export function useAdmit() {
   const queries = useQueryClient();
   return useMutation({
     mutationFn: ({ id }: Application) => call(admitApplication, { params: { id } }),
     // A refusal means that the list on screen is old, most likely.
-    onSettled: () => queries.invalidateQueries({ queryKey: applicationsQuery.queryKey }),
-    onSuccess: () => queries.invalidateQueries({ queryKey: ["members"] }),
+    onSettled: () => void queries.invalidateQueries({ queryKey: applicationsQuery.queryKey }),
+    onSuccess: () => void queries.invalidateQueries({ queryKey: ["members"] }),
   });
 }
 
@@ -45,7 +47,7 @@ export function useDecline() {
   return useMutation({
     mutationFn: ({ application, reason, key }: { application: Application; reason: string; key: string }) =>
       call(declineApplication, { params: { id: application.id }, body: { reason }, idempotencyKey: key }),
-    onSettled: () => queries.invalidateQueries({ queryKey: applicationsQuery.queryKey }),
+    onSettled: () => void queries.invalidateQueries({ queryKey: applicationsQuery.queryKey }),
   });
 }
 

@@ -69,7 +69,10 @@ function AdmitDialog({ application, onClose, onOvertaken }: DecisionProps) {
 
   function confirm() {
     admit.mutate(application, {
-      onSuccess: () => showToast(`${application.shopName} is admitted.`),
+      onSuccess: () => {
+        onClose();
+        showToast(`${application.shopName} is admitted.`);
+      },
       onError: (error) => {
         if (!isAlreadyDecided(error)) return;
         onClose();

@@ -34,7 +34,7 @@ export function ChangesSummary({ changes }: { changes: EditionChanges }) {
             {groupsByMetal(changes[kind]).map(({ metal, groups }) => (
               <div key={metal} className="grid gap-x-4 border-t border-line py-1.5 sm:grid-cols-[10rem_1fr]">
                 <dt className="font-bold">{metal}</dt>
-                <dd className="figures whitespace-normal text-soft">{groups.map(({ name }) => name).join(" · ")}</dd>
+                <dd className="text-soft">{groups.map(({ name }) => name).join(" · ")}</dd>
               </div>
             ))}
           </dl>

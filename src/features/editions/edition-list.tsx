@@ -9,7 +9,7 @@ export function EditionList({ editions }: { editions: readonly Edition[] }) {
   const current = editions.find((edition) => edition.state === "published");
   return (
     <section>
-      <h2 className="mb-3 text-lg font-bold">Before</h2>
+      <h2 className="mb-3 text-lg font-bold">Editions so far</h2>
       <ol className="border-t border-line">
         {editions.map((edition) => (
           <li key={edition.id} className="border-b border-line">
@@ -44,7 +44,7 @@ function EditionLine({ edition, current }: { edition: Edition; current: boolean 
 
 function EditionState({ edition, current }: { edition: Edition; current: boolean }) {
   if (current) return <StateWord kind="sound">Current</StateWord>;
-  if (edition.state === "published") return <StateWord kind="info">Replaced</StateWord>;
+  if (edition.state === "published") return <span className="text-muted">Replaced</span>;
   if (edition.state === "built") return <StateWord kind="watch">Built</StateWord>;
   return <span className="text-muted">Discarded</span>;
 }

@@ -39,11 +39,11 @@ export function usePublish(id: string) {
   const queries = useQueryClient();
   return useMutation({
     mutationFn: () => call(publishEdition, { params: { id } }),
-    onSettled: () =>
-      Promise.all([
-        queries.invalidateQueries({ queryKey: allEditionsQuery.queryKey }),
-        queries.invalidateQueries({ queryKey: ["editions"] }),
-      ]),
+    // Not waited for: the dialog closes itself before the edition it stands in moves down the page.
+    onSettled: () => {
+      void queries.invalidateQueries({ queryKey: allEditionsQuery.queryKey });
+      void queries.invalidateQueries({ queryKey: ["editions"] });
+    },
   });
 }
 
@@ -51,6 +51,6 @@ export function useDiscard(id: string) {
   const queries = useQueryClient();
   return useMutation({
     mutationFn: () => call(discardEdition, { params: { id } }),
-    onSettled: () => queries.invalidateQueries({ queryKey: allEditionsQuery.queryKey }),
+    onSettled: () => void queries.invalidateQueries({ queryKey: allEditionsQuery.queryKey }),
   });
 }

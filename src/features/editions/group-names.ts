@@ -43,7 +43,7 @@ function metalName(material: Material, gas: ProcessGas): string {
     : `${materialLabels[material]}, ${processGasLabels[gas].toLowerCase()}`;
 }
 
-/** "3.15 mm, nozzle 0.8" with no-break spaces: one name never breaks in the middle. */
+/** "3.15 mm, nozzle 0.8 mm" with no-break spaces: one name never breaks in the middle. */
 function groupName({ bandIndex, nozzleMm }: PeerGroupKey): string {
-  return `${bandNominalMm(bandIndex)} mm, nozzle ${nozzleMm.toFixed(1)}`.replaceAll(" ", "\u00a0");
+  return `${bandNominalMm(bandIndex)} mm, nozzle ${nozzleMm.toFixed(1)} mm`.replaceAll(" ", "\u00a0");
 }

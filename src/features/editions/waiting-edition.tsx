@@ -55,7 +55,12 @@ function PublishDialog({ edition, onClose }: AskProps) {
   const publish = usePublish(edition.id);
   const error = messageOf(publish.error);
   const confirm = () =>
-    publish.mutate(undefined, { onSuccess: () => showToast(`Edition ${edition.number} is published.`) });
+    publish.mutate(undefined, {
+      onSuccess: () => {
+        onClose();
+        showToast(`Edition ${edition.number} is published.`);
+      },
+    });
   return (
     <Dialog
       open
@@ -97,7 +102,12 @@ function DiscardDialog({ edition, onClose }: AskProps) {
       pending={discard.isPending}
       error={messageOf(discard.error)}
       onConfirm={() =>
-        discard.mutate(undefined, { onSuccess: () => showToast(`Edition ${edition.number} is discarded.`) })
+        discard.mutate(undefined, {
+          onSuccess: () => {
+            onClose();
+            showToast(`Edition ${edition.number} is discarded.`);
+          },
+        })
       }
     >
       Its figures are thrown away and its number is not used again. The published edition stands; another can be built

@@ -7,5 +7,5 @@ export const exampleFigures = {
   /** (2430 - 2060 on a log scale) / 1.349 */
   spread: 0.1225,
   ownMmMin: 2450,
-  sentence: "Your 2,450\u00a0mm/min is quicker than most: about 78\u00a0% of peers cut slower.",
+  sentence: "Your 2,450 mm/min is quicker than most: about 78 % of peers cut slower.",
 };

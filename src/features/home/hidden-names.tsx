@@ -13,7 +13,7 @@ const rules = [
   ["Five shops or nothing", "With fewer, a group shows no figure, and not how many are missing."],
   [
     "No single shop in a figure",
-    "Every shop weighs the same. Never the smallest or the largest value; the outer tenths only from ten shops on. Shop counts only as 5-9, 10-19, 20-49, 50+.",
+    "Every shop weighs the same. Never the smallest or the largest value; the outer tenths only from ten shops on. How many shops stand behind it is said in bands: 5 to 9, 10 to 19, 20 to 49, 50 or more.",
   ],
   [
     "Nothing moves in between",
@@ -21,7 +21,7 @@ const rules = [
   ],
   [
     "What an admin sees",
-    "Your shop's name, place, people, and how many machines and shared recipes it has. No page shows an admin which recipe is whose.",
+    "Your shop's name and place, what you wrote in the application, and how many people, machines and shared recipes it has. No page shows an admin which recipe is whose.",
   ],
   [
     "What this cannot do",

@@ -16,7 +16,7 @@ const uses = [
   ["Compare", "Each setpoint among the shops that cut the same. What is unusual, and what to check first."],
   [
     "Start",
-    "On a metal you never cut: a starting recipe for your own machine, with ranges and a short plan of test cuts.",
+    "On a metal you have never cut: a starting recipe for your own machine, with ranges and a short plan of test cuts.",
   ],
 ] as const;
 

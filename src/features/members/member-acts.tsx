@@ -9,16 +9,23 @@ import { useReinstate, useSuspend } from "./members.queries.ts";
 
 /** What an admin can do about a member, each asked for once more. */
 export function MemberActs({ member }: { member: Member }) {
-  const [open, setOpen] = useState(false);
+  // What was asked stays asked, even if the member's state moves below the open dialog.
+  const [asking, setAsking] = useState<"suspend" | "reinstate">();
+  const close = () => setAsking(undefined);
   const suspended = member.state === "suspended";
   const word = suspended ? "Reinstate" : "Suspend";
-  const Ask = suspended ? ReinstateDialog : SuspendDialog;
   return (
     <>
-      <Button small kind="secondary" aria-label={`${word} ${member.name}`} onClick={() => setOpen(true)}>
+      <Button
+        small
+        kind={suspended ? "secondary" : "quiet"}
+        aria-label={`${word} ${member.name}`}
+        onClick={() => setAsking(suspended ? "reinstate" : "suspend")}
+      >
         {word}
       </Button>
-      {open ? <Ask member={member} onClose={() => setOpen(false)} /> : null}
+      {asking === "suspend" ? <SuspendDialog member={member} onClose={close} /> : null}
+      {asking === "reinstate" ? <ReinstateDialog member={member} onClose={close} /> : null}
     </>
   );
 }

@@ -23,7 +23,7 @@ export function useSuspend({ id }: Member) {
   return useMutation({
     mutationFn: ({ reason, key }: { reason: string; key: string }) =>
       call(suspendMember, { params: { id }, body: { reason }, idempotencyKey: key }),
-    onSettled: () => queries.invalidateQueries({ queryKey: ["members"] }),
+    onSettled: () => void queries.invalidateQueries({ queryKey: ["members"] }),
   });
 }
 
@@ -31,6 +31,6 @@ export function useReinstate({ id }: Member) {
   const queries = useQueryClient();
   return useMutation({
     mutationFn: () => call(reinstateMember, { params: { id } }),
-    onSettled: () => queries.invalidateQueries({ queryKey: ["members"] }),
+    onSettled: () => void queries.invalidateQueries({ queryKey: ["members"] }),
   });
 }
