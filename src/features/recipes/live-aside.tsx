@@ -6,8 +6,7 @@ import { CautionsLine } from "../../lib/cautions.tsx";
 import { useGroupFigures } from "../../lib/edition-queries.ts";
 import { HeatNote } from "./heat-note.tsx";
 import { LiveStandings } from "./live-standing.tsx";
-import type { RecipeControl } from "./recipe-form.tsx";
-import { figuresSoFar, type RecipeFormValues } from "./recipe-form-values.ts";
+import { figuresSoFar, type RecipeControl, type RecipeFormValues } from "./recipe-form-values.ts";
 
 /** Asked for while thickness or nozzle are not typed yet: the metal's figures are fetched, the group is not looked at. */
 const placeholder = { thicknessMm: 3, nozzleMm: 0.8 };

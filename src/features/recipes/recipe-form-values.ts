@@ -1,4 +1,4 @@
-import type { FieldPath } from "react-hook-form";
+import type { Control, FieldPath } from "react-hook-form";
 import { z } from "zod";
 import { RecipeContent } from "#shared/contracts/recipes.ts";
 import type { Material, ProcessGas, Surface } from "#shared/materials/materials.ts";
@@ -30,6 +30,8 @@ export interface RecipeFormOutput {
   reason: string;
   baseVersion: number;
 }
+
+export type RecipeControl = Control<RecipeFormValues, unknown, RecipeFormOutput>;
 
 interface FieldRule {
   field: LimitedField;

@@ -1,5 +1,5 @@
 import { type ReactNode, useMemo } from "react";
-import { type Control, useWatch } from "react-hook-form";
+import { useWatch } from "react-hook-form";
 import type { Machine } from "#shared/contracts/machines.ts";
 import type { RecipeContent } from "#shared/contracts/recipes.ts";
 import type { UnitSystem } from "#shared/units/units.ts";
@@ -20,8 +20,6 @@ import {
 import { SetpointFields } from "./setpoint-fields.tsx";
 import { SubjectFields } from "./subject-fields.tsx";
 import { useQuestion } from "./use-question.ts";
-
-export type RecipeControl = Control<RecipeFormValues, unknown, RecipeFormOutput>;
 
 export interface RecipeFormProps {
   /** Names the draft. */

@@ -7,8 +7,7 @@ import { useGroupFigures } from "../../lib/edition-queries.ts";
 import { FormQuantity } from "../../lib/form-quantity.tsx";
 import { liveSubject } from "./live-aside.tsx";
 import { LiveStanding } from "./live-standing.tsx";
-import type { RecipeControl } from "./recipe-form.tsx";
-import { figureReading, figuresSoFar, type RecipeFormValues } from "./recipe-form-values.ts";
+import { figureReading, figuresSoFar, type RecipeControl, type RecipeFormValues } from "./recipe-form-values.ts";
 
 export interface SetpointFieldsProps {
   control: RecipeControl;

@@ -15,8 +15,12 @@ import type { ProblemForm } from "../../lib/form.ts";
 import { FormQuantity } from "../../lib/form-quantity.tsx";
 import { SelectField } from "../../ui/select-field.tsx";
 import { TextField } from "../../ui/text-field.tsx";
-import type { RecipeControl } from "./recipe-form.tsx";
-import { figureReading, type RecipeFormOutput, type RecipeFormValues } from "./recipe-form-values.ts";
+import {
+  figureReading,
+  type RecipeControl,
+  type RecipeFormOutput,
+  type RecipeFormValues,
+} from "./recipe-form-values.ts";
 
 export interface SubjectFieldsProps {
   field: (name: FieldPath<RecipeFormValues>) => ReturnType<ProblemForm<RecipeFormValues, RecipeFormOutput>["field"]>;
