@@ -150,37 +150,42 @@ function Square({ square, frame, hatch, place, reached, onFocus }: SquareProps) 
   const depth = figures.status === "released" ? depths[figures.shops] : null;
   const inner = { x: 1, y: 1, width: frame.width - 2, height: frame.height - 2 };
   return (
-    <Link
-      to={`/peers/${groupId}`}
-      aria-label={squareName(square)}
-      data-square={place}
-      tabIndex={reached ? 0 : -1}
-      onFocus={onFocus}
-      className="group outline-none"
-    >
-      <Shape.Bar {...inner} className="fill-surface" />
-      {depth ? (
-        <Shape.Bar {...inner} className="fill-ink" opacity={depth.opacity} />
-      ) : (
-        <Shape.Bar {...inner} fill={`url(#${hatch})`} className="stroke-line" />
-      )}
+    <>
+      <Link
+        to={`/peers/${groupId}`}
+        aria-label={squareName(square)}
+        data-square={place}
+        tabIndex={reached ? 0 : -1}
+        onFocus={onFocus}
+        className="group outline-none"
+      >
+        <Shape.Bar {...inner} className="fill-surface" />
+        {depth ? (
+          <Shape.Bar {...inner} className="fill-ink" opacity={depth.opacity} />
+        ) : (
+          <Shape.Bar {...inner} fill={`url(#${hatch})`} className="stroke-line" />
+        )}
+        {own > 0 ? <PunchMarkShape x={frame.width - 12} y={12} radius={6} /> : null}
+        <Shape.Bar
+          {...inner}
+          fill="none"
+          strokeWidth={3}
+          className="stroke-transparent group-hover:stroke-action group-focus-visible:stroke-action"
+        />
+      </Link>
+      {/* Beside the link, whose name says it in words: inside, it would be a second name. */}
       {figures.status === "released" && depth ? (
-        <text
-          x={frame.width / 2}
-          y={frame.height / 2 + 9}
-          textAnchor="middle"
-          className={`figures text-sm ${depth.figure}`}
-        >
-          {figures.shops.replace("-", "–")}
-        </text>
+        <Group.Group aria-hidden="true" className="pointer-events-none">
+          <text
+            x={frame.width / 2}
+            y={frame.height / 2 + 9}
+            textAnchor="middle"
+            className={`figures text-sm ${depth.figure}`}
+          >
+            {figures.shops.replace("-", "–")}
+          </text>
+        </Group.Group>
       ) : null}
-      {own > 0 ? <PunchMarkShape x={frame.width - 12} y={12} radius={6} /> : null}
-      <Shape.Bar
-        {...inner}
-        fill="none"
-        strokeWidth={3}
-        className="stroke-transparent group-hover:stroke-action group-focus-visible:stroke-action"
-      />
-    </Link>
+    </>
   );
 }
