@@ -131,7 +131,9 @@ test("admits Osterhollow, whose applicant then owns the new shop", async ({ sign
   await applicant.goto("/");
   await applicant.getByRole("heading", { level: 1, name: "Osterhollow Fabrication is admitted" }).waitFor();
   await expectUsable(applicant);
-  await applicant.goto("/auth/sign-in?returnTo=/");
+  await applicant.getByRole("main").getByRole("button", { name: "Sign out" }).click();
+  await applicant.getByRole("button", { name: "Sign out here too" }).click();
+  await applicant.getByRole("main").getByRole("link", { name: "Sign in" }).click();
   await chooseAccount(applicant, "demo-applicant");
   await applicant.getByText("First the machine, then its recipes").waitFor();
   await expectUsable(applicant);
