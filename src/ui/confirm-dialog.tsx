@@ -1,4 +1,4 @@
-import { type FormEvent, type ReactNode, useState } from "react";
+import { type FormEvent, type ReactNode, useEffect, useRef, useState } from "react";
 import { Button } from "./button.tsx";
 import { Dialog } from "./dialog.tsx";
 import { TextField } from "./text-field.tsx";
@@ -28,14 +28,20 @@ function OpenConfirmDialog(props: ConfirmDialogProps) {
   const { onClose, title, children, act, onConfirm, typeName, kind = "danger", pending = false, error } = props;
   const [typed, setTyped] = useState("");
   const [problem, setProblem] = useState<string>();
+  // A quick second press comes before `pending` does: it must not send twice. Free again once the act has ended.
+  const acted = useRef(false);
+  useEffect(() => {
+    if (!pending) acted.current = false;
+  }, [pending]);
 
   function confirm(event: FormEvent) {
     event.preventDefault();
-    if (pending) return;
+    if (pending || acted.current) return;
     if (typeName !== undefined && typed.trim() !== typeName.trim()) {
       setProblem(`This does not match. Type ${typeName}`);
       return;
     }
+    acted.current = true;
     onConfirm();
   }
 

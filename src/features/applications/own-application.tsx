@@ -71,7 +71,7 @@ function Address() {
 function SignOutButton() {
   const signOut = useSignOut();
   return (
-    <Button kind="primary" pending={signOut.isPending || signOut.isSuccess} onClick={() => signOut.mutate()}>
+    <Button kind="primary" pending={signOut.isPending || signOut.isSuccess} onClick={() => signOut.mutateAsync()}>
       Sign out
     </Button>
   );

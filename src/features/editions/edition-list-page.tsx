@@ -47,7 +47,7 @@ function BuildButton() {
   const start = useStartBuild();
   const busy = start.isPending || isOpen(builds?.[0]);
   const begin = () =>
-    start.mutate(undefined, { onError: (error) => showToast(asProblem(error).message, { kind: "stop" }) });
+    start.mutateAsync().catch((error: unknown) => showToast(asProblem(error).message, { kind: "stop" }));
   return (
     <Button kind="primary" pending={busy} onClick={begin}>
       {isOpen(builds?.[0]) ? "Building…" : "Build an edition"}

@@ -55,11 +55,9 @@ function PublishDialog({ edition, onClose }: AskProps) {
   const publish = usePublish(edition.id);
   const error = messageOf(publish.error);
   const confirm = () =>
-    publish.mutate(undefined, {
-      onSuccess: () => {
-        onClose();
-        showToast(`Edition ${edition.number} is published.`);
-      },
+    publish.mutateAsync().then(() => {
+      onClose();
+      showToast(`Edition ${edition.number} is published.`);
     });
   return (
     <Dialog

@@ -17,7 +17,7 @@ export function Suspended({ shopName }: { shopName: string }) {
       <p className="mt-4 max-w-text">Ask the network's admin for the reason and for what would lift it.</p>
       <div className="mt-6 flex flex-wrap gap-2">
         {admin ? <ButtonLink to="/members">Members</ButtonLink> : null}
-        <Button kind="primary" pending={signOut.isPending || signOut.isSuccess} onClick={() => signOut.mutate()}>
+        <Button kind="primary" pending={signOut.isPending || signOut.isSuccess} onClick={() => signOut.mutateAsync()}>
           Sign out
         </Button>
       </div>

@@ -78,6 +78,15 @@ test("demo data is called so, real data is not", () => {
   expect(screen.queryByText(/Demo data/)).toBeNull();
 });
 
+test.each([
+  ["a member", owner],
+  ["a visitor", visitor],
+])("Method and cautions are a step away for %s", (_, session) => {
+  renderFrame(session);
+  const links = within(screen.getByRole("contentinfo")).getAllByRole("link");
+  expect(links.map((link) => link.getAttribute("href"))).toEqual(["/method", "/cautions"]);
+});
+
 test("a visitor signs in and comes back to the same place", () => {
   renderFrame(visitor);
   const link = screen.getByRole("link", { name: "Sign in" });
