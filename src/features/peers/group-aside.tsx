@@ -3,17 +3,25 @@ import type { Recipe } from "#shared/contracts/recipes.ts";
 import type { PeerGroupFigures } from "#shared/contracts/released-figures.ts";
 import { bandNominalMm } from "#shared/peers/peer-group.ts";
 import { ButtonLink } from "../../ui/button.tsx";
+import { Skeleton } from "../../ui/skeleton.tsx";
 import { TextLink } from "../../ui/text-link.tsx";
 import { CheckFirst } from "./check-first.tsx";
 import { acceptableWords, countWords } from "./peer-words.ts";
 
+export interface GroupAsideProps {
+  figures: PeerGroupFigures;
+  own: Recipe | undefined;
+  /** Whether it is known yet which recipes are in the book. */
+  known: boolean;
+}
+
 /** Beside the strips: what to make of them and where to go from here. */
-export function GroupAside({ figures, own }: { figures: PeerGroupFigures; own: Recipe | undefined }) {
+export function GroupAside({ figures, own, known }: GroupAsideProps) {
   return (
     <aside className="space-y-4" aria-label="What to make of it">
       {figures.status === "released" ? (
         <Panel title="What to check first">
-          <CheckFirst group={figures} own={own} />
+          {known ? <CheckFirst group={figures} own={own} /> : <Skeleton lines={3} />}
         </Panel>
       ) : null}
       <ButtonLink to={startHref(figures, own)} kind="primary" className="w-full print:hidden">

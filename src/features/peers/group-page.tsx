@@ -60,7 +60,7 @@ function Group({ edition, figures, listed }: GroupProps) {
             <WithheldNotice figures={figures} />
           )}
         </div>
-        <GroupAside figures={figures} own={own.chosen} />
+        <GroupAside figures={figures} own={own.chosen} known={own.known} />
       </div>
       {figures.status === "released" ? <ListedRecipes recipes={listed} groupKey={key} /> : null}
     </>
@@ -70,6 +70,8 @@ function Group({ edition, figures, listed }: GroupProps) {
 const defaults = { recipe: "" };
 
 interface OwnHere {
+  /** False while the book is on its way: then nothing is said of what is not in it. */
+  known: boolean;
   recipes: readonly Recipe[];
   chosen: Recipe | undefined;
   choose: (id: string) => void;
@@ -81,9 +83,13 @@ function useOwnHere(): OwnHere {
   const { shop } = useSession();
   const key = parsePeerGroupId(groupId);
   const [state, change] = useUrlState(defaults);
-  const mine = useQuery({ ...ownRecipesQuery(key?.material ?? "mild-steel"), enabled: shop?.state === "active" });
+  const mine = useQuery({
+    ...ownRecipesQuery(key?.material ?? "mild-steel"),
+    enabled: shop?.state === "active",
+    throwOnError: true,
+  });
   const recipes = (mine.data ?? []).filter((recipe) => groupIdOf(recipe) === groupId);
   const chosen =
     recipes.find(({ id }) => id === state.recipe) ?? recipes.find((recipe) => recipe.state === "proven") ?? recipes[0];
-  return { recipes, chosen, choose: (recipe) => change({ recipe }) };
+  return { known: !mine.isLoading, recipes, chosen, choose: (recipe) => change({ recipe }) };
 }

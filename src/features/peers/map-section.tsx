@@ -26,7 +26,7 @@ interface MapSectionProps {
 export function MapSection({ edition, material, gas }: MapSectionProps) {
   const { units, shop } = useSession();
   const { data } = useQuery({ ...editionMaterialQuery(edition.id, material, gas), throwOnError: true });
-  const own = useQuery({ ...ownRecipesQuery(material), enabled: shop?.state === "active" });
+  const own = useQuery({ ...ownRecipesQuery(material), enabled: shop?.state === "active", throwOnError: true });
   const ownKeys = (own.data ?? []).map(({ version }) => peerGroupOf(peerSubjectOf(version.content)));
   if (!data) return <Skeleton lines={12} />;
   const { groups } = data;

@@ -1,3 +1,4 @@
+import { materialLabels } from "#shared/materials/materials.ts";
 import { bandNominalMm } from "#shared/peers/peer-group.ts";
 import type { UnitSystem } from "#shared/units/units.ts";
 import { TextLink } from "../../ui/text-link.tsx";
@@ -11,7 +12,10 @@ export function MapTable({ layout, units }: { layout: MapLayout; units: UnitSyst
   if (rows.length === 0) return <p className="mt-2 text-soft">Nothing to list: no group is shown here yet.</p>;
   return (
     <div className="mt-2 overflow-x-auto">
-      <table className="w-full text-left">
+      <table
+        className="w-full text-left"
+        aria-label={`Peer groups of ${materialLabels[rows[0]!.key.material].toLowerCase()}`}
+      >
         <thead className="text-sm">
           <tr>
             {["Group", "Sizes that meet", "Shops", "Yours"].map((head) => (

@@ -24,6 +24,9 @@ export function RecipeActions({ query, recipe, behind }: RecipeActionsProps) {
   const save = useSaveStartingRecipe();
   const fileName = `starting-recipe-${query.material}-${query.thicknessMm}mm.json`;
 
+  // Stays so until the draft's page is there: a second press meanwhile must not make a second draft.
+  const isSaved = save.isPending || save.isSuccess;
+
   async function keep() {
     try {
       const kept = await save.mutateAsync(query);
@@ -37,7 +40,7 @@ export function RecipeActions({ query, recipe, behind }: RecipeActionsProps) {
   return (
     <div className="print:hidden">
       <div className="flex flex-wrap gap-2">
-        <Button kind="primary" pending={behind} disabled={recipe.nozzle.nozzleMm === null} onClick={keep}>
+        <Button kind="primary" pending={behind || isSaved} disabled={recipe.nozzle.nozzleMm === null} onClick={keep}>
           Save to book
         </Button>
         <a className={buttonClasses("secondary")} href={urlOf(getStartingRecipe, { query })} download={fileName}>

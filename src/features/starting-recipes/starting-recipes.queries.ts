@@ -24,9 +24,6 @@ export function useSaveStartingRecipe() {
       if (sent.current.content !== content) sent.current = { content, key: randomKey() };
       return call(saveStartingRecipe, { body, idempotencyKey: sent.current.key });
     },
-    onSuccess: () => {
-      sent.current = { content: "", key: "" };
-      return queries.invalidateQueries({ queryKey: recipesKey });
-    },
+    onSuccess: () => queries.invalidateQueries({ queryKey: recipesKey }),
   });
 }
