@@ -62,10 +62,7 @@ interface VersionChoiceProps {
 }
 
 function VersionChoice({ label, versions, chosen, onChoose }: VersionChoiceProps) {
-  const choices = versions.map(({ number, changedAt }) => ({
-    value: String(number),
-    label: `Version ${number}, ${formatShortDate(changedAt)}`,
-  }));
+  const choices = versions.map(({ number }) => ({ value: String(number), label: `Version ${number}` }));
   return (
     <div>
       <SelectField
@@ -75,7 +72,7 @@ function VersionChoice({ label, versions, chosen, onChoose }: VersionChoiceProps
         onChange={(event) => onChoose(event.target.value)}
       />
       <p className="mt-1 text-sm text-muted">
-        {chosen.changedBy || "Somebody who has left"}
+        {formatShortDate(chosen.changedAt)}, {chosen.changedBy || "somebody who has left"}
         {chosen.reason ? `: “${chosen.reason}”` : null}
       </p>
     </div>

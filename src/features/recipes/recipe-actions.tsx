@@ -22,11 +22,11 @@ export function RecipeActions({ recipe }: { recipe: Recipe }) {
           <ButtonLink to={`/recipes/${id}/edit`}>Change</ButtonLink>
         </>
       )}
-      <ButtonLink to={`/recipes/new?copy=${id}`} kind="quiet">
+      <ButtonLink to={`/recipes/new?copy=${id}`} kind="quiet" small className="self-center max-md:-ml-3">
         <Copy aria-hidden="true" size={18} />
         Copy as new
       </ButtonLink>
-      <Button kind="quiet" onClick={() => window.print()}>
+      <Button kind="quiet" small className="self-center" onClick={() => window.print()}>
         <Printer aria-hidden="true" size={18} />
         Setup sheet
       </Button>
@@ -41,7 +41,7 @@ function Retire({ recipe }: { recipe: Recipe }) {
   const retire = useRetireRecipe(recipe.id);
   return (
     <>
-      <Button kind="quiet" onClick={() => setOpen(true)}>
+      <Button kind="quiet" small className="self-center" onClick={() => setOpen(true)}>
         Retire
       </Button>
       <ConfirmDialog

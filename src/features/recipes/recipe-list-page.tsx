@@ -33,11 +33,7 @@ export function RecipeListPage() {
 
   return (
     <>
-      <PageHeader
-        title="Recipes"
-        facts="The shop's own book. Only what you share leaves it, and without your name"
-        actions={isEmptyBook ? null : <ListActions />}
-      />
+      <PageHeader title="Recipes" facts="The shop's own book" actions={isEmptyBook ? null : <ListActions />} />
       {isEmptyBook ? (
         <EmptyBook hasMachine={machines.length > 0} />
       ) : (
