@@ -13,7 +13,9 @@ export const SharingPreview = z.object({
   groupLabel: z.string(),
   listed: ListedRecipe.omit({ id: true })
     .nullable()
-    .describe("The nameless copy as an edition would hold it, with every machine trait it could come to show; null unless listed"),
+    .describe(
+      "The nameless copy as an edition would hold it, with every machine trait it could come to show; null unless listed",
+    ),
   staysHere: z
     .array(z.object({ what: z.string(), value: z.string() }))
     .describe("What never leaves the shop, with the shop's own values"),

@@ -1,17 +1,11 @@
-import type { LucideIcon } from "lucide-react";
 import type { ReactNode } from "react";
 import { NavLink } from "react-router-dom";
 import { classNames } from "../ui/class-names.ts";
 import { Toasts } from "../ui/toasts.tsx";
 import { Footer } from "./footer.tsx";
 import { KeyboardShortcuts } from "./keyboard-shortcuts.tsx";
+import type { Place } from "./place.ts";
 import { TopBar } from "./top-bar.tsx";
-
-export interface Place {
-  label: string;
-  to: string;
-  icon: LucideIcon;
-}
 
 export interface AppFrameProps {
   places: readonly Place[];

@@ -1,7 +1,7 @@
 import { BookOpen, ChartNoAxesColumn, ClipboardCheck, Compass, Inbox, Library, Users } from "lucide-react";
 import type { Session } from "#shared/contracts/accounts.ts";
 import { bookFiles } from "#shared/contracts/book-files.ts";
-import type { Place } from "./app-frame.tsx";
+import type { Place } from "./place.ts";
 import type { MenuLink } from "./shop-menu.tsx";
 
 const shopPlaces: readonly Place[] = [

@@ -2,7 +2,7 @@ import type { ReactNode } from "react";
 import { Link, NavLink } from "react-router-dom";
 import { classNames } from "../ui/class-names.ts";
 import { Wordmark } from "../ui/wordmark.tsx";
-import type { Place } from "./app-frame.tsx";
+import type { Place } from "./place.ts";
 
 export function TopBar({ places, corner }: { places: readonly Place[]; corner: ReactNode }) {
   return (

@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, expect, test } from "vitest";
-import { openDatabase, type Database } from "#server/db/client.ts";
+import { type Database, openDatabase } from "#server/db/client.ts";
 import { forgetOldAnswers } from "#server/http/idempotency.queries.ts";
 import { countHit, forgetPassedWindows } from "#server/http/rate-limit.queries.ts";
 import { createTestDatabase, type TestDatabase } from "../../support/database.ts";
