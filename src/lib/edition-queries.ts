@@ -16,9 +16,7 @@ export const currentEditionQuery = queryOptions({
 export const editionMaterialQuery = (id: string | undefined, material: Material, gas: ProcessGas) =>
   queryOptions({
     queryKey: ["editions", id, "materials", material, gas],
-    queryFn: id
-      ? ({ signal }) => call(getEditionMaterial, { params: { id, material, gas } }, signal)
-      : skipToken,
+    queryFn: id ? ({ signal }) => call(getEditionMaterial, { params: { id, material, gas } }, signal) : skipToken,
     staleTime: Number.POSITIVE_INFINITY,
   });
 

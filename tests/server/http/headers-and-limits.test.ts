@@ -128,15 +128,13 @@ test("what PostgreSQL says of a value it cannot read stays out of the log", asyn
     torchPressureBar: 5,
     dryness: "refrigerated",
   };
-  const answer = await (await api.as(boss.id))
-    .post("/api/machines")
-    .send({
-      ...machine,
-      heightControl: "none",
-      heightControlSampleHz: null,
-      topFeedMmMin: 9000,
-      note: "ada@private.example",
-    });
+  const answer = await (await api.as(boss.id)).post("/api/machines").send({
+    ...machine,
+    heightControl: "none",
+    heightControlSampleHz: null,
+    topFeedMmMin: 9000,
+    note: "ada@private.example",
+  });
   expect([answer.status, answer.body.type]).toEqual([500, "/problems/internal"]);
   expect(JSON.stringify(answer.body)).not.toMatch(/integer|note|sql/i);
   expect(log.text()).toContain("PostgreSQL refused a value (22P02)");
