@@ -1,13 +1,13 @@
-import pino from "pino";
 import { createApp } from "./app.ts";
 import { openDatabase } from "./db/client.ts";
 import { readSettings } from "./env.ts";
 import { forgetOldAnswers } from "./http/idempotency.queries.ts";
 import { forgetPassedWindows } from "./http/rate-limit.queries.ts";
+import { openLogger } from "./logger.ts";
 import { onStopSignal } from "./process-end.ts";
 
 const settings = readSettings(process.env);
-const logger: pino.Logger = pino({ level: settings.LOG_LEVEL });
+const logger = openLogger(settings.LOG_LEVEL);
 const database = openDatabase(settings.DATABASE_URL, { max: settings.DATABASE_POOL });
 const app = createApp(settings, database, logger);
 

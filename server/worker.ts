@@ -1,10 +1,10 @@
-import pino from "pino";
 import { serveBuildJobs } from "./features/editions/build-jobs.ts";
+import { openLogger } from "./logger.ts";
 import { onStopSignal } from "./process-end.ts";
 import { readWorkerSettings } from "./worker-env.ts";
 
 const settings = readWorkerSettings(process.env);
-const logger: pino.Logger = pino({ level: settings.LOG_LEVEL });
+const logger = openLogger(settings.LOG_LEVEL);
 const stop = new AbortController();
 
 const ended = serveBuildJobs(

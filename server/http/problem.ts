@@ -49,6 +49,8 @@ export const sendProblem: ErrorRequestHandler = (error, req, res, next) => {
   const { status } = problemTypes[refusal.problem];
   if (status >= 500) req.log.error({ err: error, problem: refusal.problem }, "request failed");
   if (status === 503) res.set("Retry-After", "3");
+  // A handler may have named the answer it was about to give: a refusal is neither that version nor that file.
+  for (const header of ["ETag", "Content-Disposition"]) res.removeHeader(header);
   res.status(status).type("application/problem+json").set("Cache-Control", "no-store");
   res.send(JSON.stringify(problemBody(refusal, String(req.id))));
 };

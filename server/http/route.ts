@@ -57,7 +57,7 @@ export function route<
         req,
         ...replyTools(req, res),
       };
-      return once(tx, actor, endpoint, req, async () => {
+      return once(tx, actor, endpoint, req, context.body, async () => {
         const result = await handler(context);
         if (result === notModified) return { status: 304, body: undefined };
         return { status: endpoint.status, body: endpoint.response.parse(result) };
@@ -103,21 +103,26 @@ function replyTools(req: Request, res: Response) {
   };
 }
 
-/** A POST sent again with the same Idempotency-Key gets the first answer and does nothing twice. */
+/**
+ * A POST sent again with the same Idempotency-Key gets the first answer and does nothing twice. What anybody may call does
+ * no harm sent twice, and is not kept: the answer to a sign-out holds the ID token.
+ */
 async function once(
   tx: Db,
   actor: Actor,
   endpoint: Endpoint,
   req: Request,
+  body: unknown,
   work: () => Promise<Answer>,
 ): Promise<Answer> {
   const key = req.get("Idempotency-Key");
-  if (endpoint.method !== "post" || key === undefined || actor.userId === null) return work();
+  const mayRepeat = endpoint.method !== "post" || endpoint.access === "anyone";
+  if (mayRepeat || key === undefined || actor.userId === null) return work();
   if (!/^[\w-]{8,64}$/.test(key)) {
     throw new ProblemError("invalid-request", { detail: "Idempotency-Key needs 8 to 64 letters, digits, - or _" });
   }
   const digest = createHash("sha256")
-    .update(`${req.originalUrl}\n${JSON.stringify(req.body)}`)
+    .update(`${req.originalUrl}\n${JSON.stringify(body)}`)
     .digest("hex");
   const known = await claimKey(tx, actor.userId, key, digest);
   if (known) {

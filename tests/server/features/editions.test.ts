@@ -192,3 +192,11 @@ test("figures are for members: not for visitors, nor for a suspended shop", asyn
   await (await api.as()).get(path).expect(401);
   await (await api.as(suspended.boss.id)).get(path).expect(403);
 });
+
+test("a refusal carries no version of what was asked for", async () => {
+  const client = await api.as(own.boss.id);
+  const { edition } = (await client.get("/api/editions/current")).body;
+  const answer = await client.get(`/api/editions/${edition.id}/groups/no-group`).expect(404);
+  expect(answer.headers.etag).toBeUndefined();
+  expect(answer.headers["cache-control"]).toBe("no-store");
+});

@@ -151,6 +151,24 @@ test("a request that failed leaves its key free", async () => {
   expect((await send({ ...table, name: "Another" })).status).toBe(201);
 });
 
+test("an answer to what anybody may call is not kept: a sign-out's holds the ID token", async () => {
+  await (await boss()).post("/api/sign-out").set("Idempotency-Key", "key-number-4").expect(200);
+  const { rows } = await api.owner.pool.query("select 1 from idempotency_keys where key = 'key-number-4'");
+  expect(rows).toEqual([]);
+});
+
+test("a body nested beyond reason is no fault of ours, with a key too", async () => {
+  const body = `{"name": ${"[".repeat(100_000)}${"]".repeat(100_000)}, "more": ${"[".repeat(20_000)}${"]".repeat(20_000)}}`;
+  const { rows } = await api.owner.pool.query("select gen_random_uuid() as id");
+  const client = await boss();
+  const answer = await client
+    .post(`/api/recipes/${rows[0].id}/retirement`)
+    .set("Idempotency-Key", "key-number-5")
+    .type("json")
+    .send(body);
+  expect(answer.status).toBe(404);
+});
+
 test("another person's key is another key, and the right to do it is asked for each time", async () => {
   const key = "key-number-3";
   const other = await makeStaffedShop(api.owner);
