@@ -1,3 +1,5 @@
+import { isSpelled, longName, plainLetters, wordsOf } from "./spelled-names.ts";
+
 /** Why a text may not be shared; in the order they are looked for. */
 export type TextRefusal = "e-mail" | "phone" | "link" | "shop-name" | "person-name" | "machine-name";
 
@@ -27,8 +29,8 @@ const tradeWords = new Set(
 
 /**
  * Screens what an owner wrote for other members to read beside a listed recipe.
- * Looks for what would name the shop or its people or lead to them, also in full-width letters, with accents or with
- * letters spaced out. It cannot know every hint a text may give: the owner sees the text as others will before it goes.
+ * Looks for what would name the shop or its people or lead to them, also in full-width or lookalike letters, with accents,
+ * invisible characters or digits for letters, or in pieces. It cannot know every hint a text may give: the owner sees the text as others will before it goes.
  * @returns every reason to refuse it; none when it may be shared
  */
 export function screenText(text: string, own: OwnNames): TextRefusal[] {
@@ -44,23 +46,8 @@ export function screenText(text: string, own: OwnNames): TextRefusal[] {
   return (Object.keys(found) as TextRefusal[]).filter((reason) => found[reason]);
 }
 
-/** Compatibility forms unified, accents and invisible characters gone; case kept. */
-function plainLetters(text: string): string {
-  return text
-    .normalize("NFKD")
-    .replace(/[\p{M}\p{Cf}]/gu, "")
-    .replace(/\s+/g, " ");
-}
-
-function wordsOf(text: string): string[] {
-  return (
-    plainLetters(text)
-      .toLowerCase()
-      .match(/[\p{L}\p{N}]+/gu) ?? []
-  );
-}
-
-const topDomain = "com|net|org|info|biz|shop|store|io|co|us|uk|ca|eu|de|fr|it|es|nl|au|nz|me|tv|app|online|site";
+const topDomain =
+  "com|net|org|info|biz|shop|store|io|co|us|uk|ca|eu|de|fr|it|es|nl|au|nz|me|tv|app|online|site|tech|pro|dev|xyz|ai|ie|se|dk|fi|pl|ch|cz|pt|jp|br|mx|za|link|page|works|tools";
 
 function holdsEmail(text: string): boolean {
   const at = String.raw`\s*(?:@|[([{]\s*at\s*[)\]}])\s*`;
@@ -88,10 +75,10 @@ function holdsPhone(text: string): boolean {
 
 function holdsShopName(text: string, shop: string): boolean {
   const telling = wordsOf(shop).filter((word) => word.length >= 3 && !tradeWords.has(word));
-  const words = new Set(wordsOf(text));
-  if (telling.some((word) => words.has(word))) return true;
+  const words = wordsOf(text);
+  if (telling.some((word) => isSpelled(words, word))) return true;
   const whole = wordsOf(shop).join("");
-  return whole.length >= 5 && wordsOf(text).join("").includes(whole);
+  return whole.length >= longName && words.join("").includes(whole);
 }
 
 /** A last name in any case; a first name only with a capital, as "will", "mark" and "art" are also words. */
@@ -99,13 +86,13 @@ function holdsPerson(text: string, person: string): boolean {
   const names = wordsOf(person).filter((name) => name.length >= 2);
   const last = names.at(-1);
   if (last === undefined) return false;
-  const words: string[] = text.match(/[\p{L}\p{N}]+/gu) ?? [];
-  const isNamed = (name: string, anyCase: boolean) =>
-    words.some((word) => word.toLowerCase() === name && (anyCase || /^\p{Lu}/u.test(word)));
-  if (names.length > 1 && isNamed(last, last.length >= 3)) return true;
-  if (names.slice(0, Math.max(1, names.length - 1)).some((name) => isNamed(name, false))) return true;
+  const words = wordsOf(text);
+  const capitals: string[] = text.match(/(?<![\p{L}\p{N}])\p{Lu}[\p{L}\p{N}]*/gu) ?? [];
+  const isCapital = (name: string) => capitals.some((word) => word.toLowerCase() === name);
+  if (names.length > 1 && (last.length >= 3 ? isSpelled(words, last) : isCapital(last))) return true;
+  if (names.slice(0, Math.max(1, names.length - 1)).some(isCapital)) return true;
   const whole = names.join("");
-  return whole.length >= 6 && wordsOf(text).join("").includes(whole);
+  return whole.length >= 6 && words.join("").includes(whole);
 }
 
 /** Machine names are often plain words, such as "North table": only the whole name tells, and only if more than trade words. */
