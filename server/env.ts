@@ -1,5 +1,7 @@
 import { z } from "zod";
 
+const isLoopback = (url: string) => ["127.0.0.1", "[::1]", "localhost"].includes(new URL(url).hostname);
+
 const flag = z
   .enum(["0", "1"])
   .default("0")
@@ -31,6 +33,16 @@ const Settings = z
       path: ["TRUST_PROXY"],
       error: "an https PUBLIC_URL needs the number of proxies in front, 1 or more",
     }),
+    // OpenID Connect Discovery 1.0, section 3: an issuer is an https address. This keeps the stand-in out as well.
+    z.refine((settings) => settings.NODE_ENV !== "production" || settings.OIDC_ISSUER.startsWith("https:"), {
+      path: ["OIDC_ISSUER"],
+      error: "must be https in production; the stand-in provider is for development and tests",
+    }),
+    z.refine(
+      ({ NODE_ENV, PUBLIC_URL }) =>
+        NODE_ENV !== "production" || PUBLIC_URL.startsWith("https:") || isLoopback(PUBLIC_URL),
+      { path: ["PUBLIC_URL"], error: "must be https in production: over http the session cookie is anybody's to read" },
+    ),
   );
 export type Settings = z.infer<typeof Settings>;
 

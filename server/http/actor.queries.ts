@@ -28,17 +28,20 @@ export async function becomeActor(tx: Db, userId: string | null): Promise<Actor>
     .leftJoin(shops, eq(shops.id, memberships.shopId))
     .where(eq(users.id, userId));
   if (!row) return visitor;
+  const admin = row.admin !== null;
+  // Whoever runs the network does none of a shop's work, nor sees its book, whatever they joined before.
+  const shop = admin ? null : row.shop;
   const actor: Actor = {
     userId: row.user.id,
     name: row.user.name,
     email: row.user.email,
     units: row.user.units,
     theme: row.user.theme,
-    admin: row.admin !== null,
-    shopId: row.shop?.id ?? null,
-    shopName: row.shop?.name ?? "",
-    shopState: row.shop?.state ?? null,
-    role: row.role,
+    admin,
+    shopId: shop?.id ?? null,
+    shopName: shop?.name ?? "",
+    shopState: shop?.state ?? null,
+    role: shop ? row.role : null,
   };
   await actAs(tx, { shop_id: actor.shopId ?? "", email: actor.email, admin: actor.admin ? "yes" : "" });
   return actor;

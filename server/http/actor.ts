@@ -44,7 +44,7 @@ export const visitor: Actor = {
   role: null,
 };
 
-/** Refuses whoever the endpoint is not for. An admin runs the network and does none of a shop's work. */
+/** Refuses whoever the endpoint is not for. An admin acts for no shop, so a shop's work is refused them too. */
 export function requireAccess(actor: Actor, access: Access): void {
   if (access === "anyone") return;
   if (actor.userId === null) throw new ProblemError("not-signed-in");

@@ -28,3 +28,10 @@ test("refuses https without a trusted proxy: secure cookies would never be set",
   expect(() => readSettings(https)).toThrow(/TRUST_PROXY/);
   expect(readSettings({ ...https, TRUST_PROXY: "1" }).TRUST_PROXY).toBe(1);
 });
+
+test("production wants https: of the sign-in provider always, of itself wherever it is not on loopback", () => {
+  const standIn = { ...whole, OIDC_ISSUER: "http://127.0.0.1:4310" };
+  expect(() => readSettings(standIn)).toThrow(/OIDC_ISSUER/);
+  expect(readSettings({ ...standIn, NODE_ENV: "development" }).OIDC_ISSUER).toBe("http://127.0.0.1:4310");
+  expect(() => readSettings({ ...whole, PUBLIC_URL: "http://tempermark.example" })).toThrow(/PUBLIC_URL/);
+});

@@ -31,6 +31,19 @@ test("an admin has no shop; somebody new has neither", async () => {
   expect((await (await api.as(user.id)).get("/api/session")).body).toMatchObject({ admin: false, shop: null });
 });
 
+test("an admin who also belongs to a shop acts for the network alone", async () => {
+  const { boss } = await makeStaffedShop(api.owner);
+  const client = await api.as(boss.id);
+  await client.get("/api/book.json").expect(200);
+  await api.owner.pool.query("insert into network_admins (user_id) values ($1)", [boss.id]);
+  expect((await client.get("/api/session")).body).toMatchObject({ admin: true, shop: null });
+  for (const path of ["/api/book.json", "/api/recipes", "/api/machines", "/api/peers/book"]) {
+    await client.get(path).expect(403);
+  }
+  await client.post("/api/machines").send({}).expect(403);
+  await client.get("/api/members").expect(200);
+});
+
 test("a person since removed is a visitor, whatever their cookie says", async () => {
   const user = await makeUser(api.owner);
   const client = await api.as(user.id);
