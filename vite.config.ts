@@ -31,8 +31,8 @@ export default defineConfig({
           name: "api",
           include: ["tests/server/**/*.test.ts"],
           env: { TZ: "UTC" },
-          testTimeout: 20_000,
-          hookTimeout: 60_000,
+          testTimeout: 60_000,
+          hookTimeout: 120_000,
         },
       },
       {
@@ -43,6 +43,7 @@ export default defineConfig({
           environment: "jsdom",
           setupFiles: ["tests/support/ui-setup.ts"],
           env: { TZ: "UTC" },
+          testTimeout: 40_000,
         },
       },
       {

@@ -1,5 +1,6 @@
 import { type CountBand, countBands, type ReleasedGroup } from "../contracts/released-figures.ts";
 import type { NozzleAdvice } from "../contracts/starting-recipe-figures.ts";
+import { countWords } from "../peers/count-words.ts";
 import { bandIndexOf, bandLabel, nozzleStep } from "../peers/peer-group.ts";
 import { lowestCurrentA, practiceNozzleMm } from "./practice.ts";
 import type { StartingRecipeInput } from "./starting-input.ts";
@@ -35,7 +36,7 @@ function byPeers({ material, thicknessMm, gas, machine, groups }: NozzleQuestion
     );
   if (!best) return null;
   const nozzle = best.key.nozzleMm;
-  const reason = `${nozzle.toFixed(1)} mm has the most peers in the ${bandLabel(band)} that your power source can follow: ${best.shops} shops.`;
+  const reason = `${nozzle.toFixed(1)} mm has the most peers in the ${bandLabel(band)} that your power source can follow: ${countWords(best.shops)}.`;
   return { nozzleMm: nozzle, chosenBy: "peers", reason };
 }
 

@@ -2,8 +2,10 @@ import type { NetworkFigures, ReleasedDistribution } from "../contracts/released
 import type { EstimateStep, StartingSetpoint } from "../contracts/starting-recipe-figures.ts";
 import { roundForRelease, roundingStep } from "../disclosure/rounding.ts";
 import type { Material } from "../materials/materials.ts";
+import { countWords } from "../peers/count-words.ts";
 import { bandLabel, bandNominalMm } from "../peers/peer-group.ts";
 import { fromScale, toScale } from "../peers/scale.ts";
+import { formatDate } from "../units/dates.ts";
 import { formatWithUnit } from "../units/format.ts";
 import { type Metric, metricDefinitions } from "./metrics.ts";
 import { quartileStretch } from "./prediction-interval.ts";
@@ -27,7 +29,7 @@ export function peersEstimate(metric: Metric, context: EstimateContext): Startin
   const steps: EstimateStep[] = [
     {
       kind: "figures",
-      text: `Median of ${shops} shops in the ${bandLabel(band)}, edition ${figuresFrom.number} of ${figuresFrom.date}.`,
+      text: `Median of ${countWords(shops)} in the ${bandLabel(band)}, edition ${figuresFrom.number} of ${formatDate(figuresFrom.date)}.`,
     },
   ];
   if (exponent !== null && factor !== 1) {
@@ -44,7 +46,7 @@ export function peersEstimate(metric: Metric, context: EstimateContext): Startin
     low: moved(reach.low),
     high: moved(reach.high),
     basis: "peers",
-    evidence: `${shops} shops, edition ${figuresFrom.number}`,
+    evidence: `${countWords(shops)}, edition ${figuresFrom.number}`,
     steps,
   };
 }

@@ -26,8 +26,8 @@ HTMLDialogElement.prototype.show ??= openDialog;
 HTMLDialogElement.prototype.showModal ??= openDialog;
 HTMLDialogElement.prototype.close ??= closeDialog;
 
-// A busy machine takes longer than the usual second to show what comes from a request.
-configure({ asyncUtilTimeout: 3000 });
+// A busy machine takes long to show what comes from a request, and the first chart to be compiled.
+configure({ asyncUtilTimeout: 15_000 });
 
 /** React asks the browser about every tag; jsdom does not know this one yet. */
 const jsdomLacksSearch = (words: unknown[]) => String(words[0]).includes("is unrecognized") && words[1] === "search";

@@ -1,5 +1,6 @@
 import type { Application } from "#shared/contracts/applications.ts";
 import { formatShortDate } from "#shared/units/dates.ts";
+import { EmptyState } from "../../ui/empty-state.tsx";
 import { StateWord } from "../../ui/notice.tsx";
 import { type Column, Table } from "../../ui/table.tsx";
 
@@ -23,27 +24,31 @@ const columns: Column<Application>[] = [
 ];
 
 export function DecidedTable({ applications }: { applications: readonly Application[] }) {
+  if (applications.length === 0) {
+    return (
+      <EmptyState title="Nothing decided yet">
+        Admitted and declined shops stand here, with the reason given.
+      </EmptyState>
+    );
+  }
   return (
-    <section className="mt-10">
-      <h2 className="mb-3 text-lg font-bold">Decided</h2>
-      <Table
-        caption="Decided applications, the latest first"
-        columns={columns}
-        rows={applications}
-        rowKey={(a) => a.id}
-        renderCard={(a) => (
-          <>
-            <div className="flex flex-wrap justify-between gap-x-4">
-              <b className="break-words">{a.shopName}</b>
-              <Decision {...a} />
-            </div>
-            <p className="text-soft">
-              {a.place} · {decidedOn(a)}
-            </p>
-            {a.reason ? <p className="mt-1 break-words text-sm text-muted">{a.reason}</p> : null}
-          </>
-        )}
-      />
-    </section>
+    <Table
+      caption="Decided applications, the latest first"
+      columns={columns}
+      rows={applications}
+      rowKey={(a) => a.id}
+      renderCard={(a) => (
+        <>
+          <div className="flex flex-wrap justify-between gap-x-4">
+            <b className="break-words">{a.shopName}</b>
+            <Decision {...a} />
+          </div>
+          <p className="text-soft">
+            {a.place} · {decidedOn(a)}
+          </p>
+          {a.reason ? <p className="mt-1 break-words text-sm text-muted">{a.reason}</p> : null}
+        </>
+      )}
+    />
   );
 }

@@ -1,12 +1,13 @@
 import type { ReactNode } from "react";
 import type { Recipe } from "#shared/contracts/recipes.ts";
 import type { PeerGroupFigures } from "#shared/contracts/released-figures.ts";
+import { countWords } from "#shared/peers/count-words.ts";
 import { bandNominalMm } from "#shared/peers/peer-group.ts";
 import { ButtonLink } from "../../ui/button.tsx";
 import { Skeleton } from "../../ui/skeleton.tsx";
 import { TextLink } from "../../ui/text-link.tsx";
 import { CheckFirst } from "./check-first.tsx";
-import { acceptableWords, countWords } from "./peer-words.ts";
+import { acceptableWords } from "./peer-words.ts";
 
 export interface GroupAsideProps {
   figures: PeerGroupFigures;

@@ -3,6 +3,7 @@ import { useParams } from "react-router-dom";
 import type { PublishedEdition } from "#shared/contracts/editions.ts";
 import type { Recipe } from "#shared/contracts/recipes.ts";
 import type { ListedRecipe, PeerGroupFigures } from "#shared/contracts/released-figures.ts";
+import { countWords } from "#shared/peers/count-words.ts";
 import { parsePeerGroupId } from "#shared/peers/peer-group.ts";
 import { formatDate } from "#shared/units/dates.ts";
 import { currentEditionQuery, editionGroupQuery } from "../../lib/edition-queries.ts";
@@ -17,7 +18,7 @@ import { ListedRecipes } from "./listed-recipes.tsx";
 import { MetricRows } from "./metric-rows.tsx";
 import { NoEditionYet } from "./no-edition-yet.tsx";
 import { OwnRecipeChoice } from "./own-recipe-choice.tsx";
-import { bandWords, countWords, gasWords, groupTitle } from "./peer-words.ts";
+import { bandWords, gasWords, groupTitle } from "./peer-words.ts";
 import { groupIdOf, ownRecipesQuery } from "./peers.queries.ts";
 import { WithheldNotice } from "./withheld-notice.tsx";
 

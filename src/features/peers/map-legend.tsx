@@ -1,8 +1,8 @@
 import { useId } from "react";
 import type { CountBand } from "#shared/contracts/released-figures.ts";
+import { countWords } from "#shared/peers/count-words.ts";
 import { PunchMark } from "../../ui/punch-mark.tsx";
 import { depths } from "./map-depth.ts";
-import { countWords } from "./peer-words.ts";
 
 /** Without a network set to a smaller quorum there is no band below five shops. */
 const usual: readonly CountBand[] = ["5-9", "10-19", "20-49", "50+"];

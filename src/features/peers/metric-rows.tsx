@@ -1,11 +1,11 @@
 import type { ReleasedGroup } from "#shared/contracts/released-figures.ts";
+import { countWords } from "#shared/peers/count-words.ts";
 import { type Standing, standingOf } from "#shared/peers/standing.ts";
 import { type Metric, metricDefinitions, metrics, type Setpoints } from "#shared/recipes/metrics.ts";
 import { formatQuantity, unitLabel } from "#shared/units/format.ts";
 import type { UnitSystem } from "#shared/units/units.ts";
 import { MetricStrip } from "../../lib/metric-strip.tsx";
 import { StripRow } from "../../ui/strip-row.tsx";
-import { countWords } from "./peer-words.ts";
 
 export interface MetricRowsProps {
   group: ReleasedGroup;

@@ -1,4 +1,3 @@
-import type { CountBand } from "#shared/contracts/released-figures.ts";
 import { type Material, materialLabels, processGasLabels } from "#shared/materials/materials.ts";
 import { bandLimitsMm, bandNominalMm, type PeerGroupKey } from "#shared/peers/peer-group.ts";
 import { formatNumber, formatWithUnit } from "#shared/units/format.ts";
@@ -17,11 +16,6 @@ export function nozzleWords(nozzleMm: number): string {
 /** "compressed air". */
 export function gasWords({ gas }: Pick<PeerGroupKey, "gas">): string {
   return processGasLabels[gas].toLowerCase();
-}
-
-/** "20 to 49 shops", "50 or more shops". */
-export function countWords(band: CountBand, what: "shops" | "recipes" = "shops"): string {
-  return band === "50+" ? `50 or more ${what}` : `${band.replace("-", " to ")} ${what}`;
 }
 
 /** The ends of a band in the member's unit, "2.82 to 3.55 mm". */

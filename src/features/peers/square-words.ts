@@ -1,8 +1,9 @@
 import { materialLabels } from "#shared/materials/materials.ts";
+import { countWords } from "#shared/peers/count-words.ts";
 import { bandNominalMm } from "#shared/peers/peer-group.ts";
 import { withheldWords } from "../../lib/metric-strip.tsx";
 import type { MapSquare } from "./map-layout.ts";
-import { countWords, nozzleWords } from "./peer-words.ts";
+import { nozzleWords } from "./peer-words.ts";
 
 /** What a square shows, without its place: "20 to 49 shops", "Not enough shops yet". */
 export function squareFact({ figures }: Pick<MapSquare, "figures">): string {

@@ -32,11 +32,14 @@ const decide = (items: Application[], state: "admitted" | "declined") => () => {
 const admission = `POST /api/applications/${waiting.id}/admission`;
 const refusal = `POST /api/applications/${waiting.id}/refusal`;
 
-test("waiting applications in full, decided ones below with their reason", async () => {
+const showDecided = async () => userEvent.click(await screen.findByRole("tab", { name: "Decided" }));
+
+test("waiting applications in full, decided ones behind their tab with the reason", async () => {
   open([waiting, declined]);
   const card = await screen.findByRole("article", { name: "Osterhollow Fabrication" });
   expect(card.textContent).toContain("owner@osterhollow.example");
   expect(card.textContent).toContain("Gates and brackets from 3 mm mild steel.");
+  await showDecided();
   const decided = screen.getByRole("table", { name: /Decided applications/ });
   expect(
     within(decided).getByRole("row", { name: /Gnarlwick Signs.*Declined.*2 Nov 2026.*Cuts by laser/ }),
@@ -46,18 +49,20 @@ test("waiting applications in full, decided ones below with their reason", async
 test("none waits", async () => {
   open([]);
   expect(await screen.findByRole("heading", { name: "No application waits" })).toBeTruthy();
-  expect(screen.queryByRole("table")).toBeNull();
+  await showDecided();
+  expect(screen.getByRole("heading", { name: "Nothing decided yet" })).toBeTruthy();
 });
 
-test("admitting asks first, is sent once, and moves the shop below", async () => {
+test("admitting asks first, is sent once, and moves the shop to the decided", async () => {
   const { sent } = open([waiting], (items) => ({ [admission]: decide(items, "admitted") }));
   await userEvent.click(await screen.findByRole("button", { name: "Admit" }));
   expect(sent.filter(({ method }) => method === "POST")).toEqual([]);
   const act = screen.getByRole("button", { name: "Admit the shop" });
   fireEvent.click(act);
   fireEvent.click(act); // before anything had time to show that it is pending
+  expect(await screen.findByText("Osterhollow Fabrication is admitted.")).toBeTruthy();
+  await showDecided();
   expect(await screen.findByRole("row", { name: /Osterhollow Fabrication.*Admitted/ })).toBeTruthy();
-  expect(screen.getByText("Osterhollow Fabrication is admitted.")).toBeTruthy();
   expect(sent.filter(({ method }) => method === "POST")).toHaveLength(1);
 });
 
@@ -69,6 +74,8 @@ test("declining needs a reason", async () => {
   expect(await screen.findByText("Give a reason the applicant can use")).toBeTruthy();
   await userEvent.type(screen.getByRole("textbox", { name: "Reason" }), "No table yet");
   await userEvent.click(act);
+  await screen.findByRole("heading", { name: "No application waits" });
+  await showDecided();
   expect(await screen.findByRole("row", { name: /Osterhollow Fabrication.*Declined/ })).toBeTruthy();
   expect(sent.find(({ method }) => method === "POST")?.body).toEqual({ reason: "No table yet" });
 });

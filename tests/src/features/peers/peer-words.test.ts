@@ -3,7 +3,6 @@ import { peerGroupOf } from "#shared/peers/peer-group.ts";
 import {
   acceptableWords,
   bandWords,
-  countWords,
   groupTitle,
   listWords,
   sizesInBand,
@@ -29,11 +28,6 @@ test("6 mm and 1/4 in meet; heavier sheet has no gauge", () => {
   expect(sizesInBand(8, "mild-steel")).toEqual(["6 mm", "1/4 in"]);
   expect(sizesInBand(14, "mild-steel")).toEqual(["25 mm", "1 in"]);
   expect(bandWords(key(1.25), "metric")).toContain("18 ga"); // 0.0478 in = 1.21 mm
-});
-
-test("counts are said as their band, never as a number of shops", () => {
-  expect(countWords("20-49")).toBe("20 to 49 shops");
-  expect(countWords("50+", "recipes")).toBe("50 or more recipes");
 });
 
 test.each([

@@ -84,11 +84,11 @@ test("each number has a range and says where it comes from", async () => {
   show({ at: "/start?thickness=3" });
   const rows = within(await screen.findByRole("region", { name: "Setpoints" })).getAllByRole("listitem");
   const row = (name: string) => rows.find((item) => item.textContent?.startsWith(name))!;
-  expect(row("Feed rate").textContent).toMatch(/2,310 mm\/min.* to .* mm\/min.*Peers: 5-9 shops/);
+  expect(row("Feed rate").textContent).toMatch(/2,310 mm\/min.* to .* mm\/min.*Peers: 5 to 9 shops/);
   expect(row("Current").textContent).toMatch(/42.5 A.*40 to 45 A.*Common practice, no source/);
   expect(row("Arc voltage").textContent).toMatch(/–.*To be found by test.*height control only observing/);
   await userEvent.click(within(row("Feed rate")).getByText("How this number came about"));
-  expect(within(row("Feed rate")).getByText(/^Median of 5-9 shops in the 3.15 mm band/)).toBeTruthy();
+  expect(within(row("Feed rate")).getByText(/^Median of 5 to 9 shops in the 3.15 mm band/)).toBeTruthy();
 });
 
 test("cautions and a numbered test plan go with the numbers", async () => {
