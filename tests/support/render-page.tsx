@@ -1,5 +1,5 @@
 import { QueryClientProvider } from "@tanstack/react-query";
-import { configure, render } from "@testing-library/react";
+import { render } from "@testing-library/react";
 import { Suspense } from "react";
 import { createMemoryRouter, type RouteObject, RouterProvider } from "react-router-dom";
 import { vi } from "vitest";
@@ -8,9 +8,6 @@ import { type ProblemType, problemTypes, problemTypeUri } from "#shared/contract
 import { createQueryClient } from "../../src/lib/query-client.ts";
 import { sessionQuery } from "../../src/shell/session.queries.ts";
 import { Toasts } from "../../src/ui/toasts.tsx";
-
-// A busy machine takes longer than the usual second to draw a whole page.
-configure({ asyncUtilTimeout: 5000 });
 
 export const testOwner: Session = {
   user: { id: "0b6f0d0e-0000-4000-8000-000000000001", name: "Ode Venn", email: "ode@brackenhold.example" },
