@@ -70,11 +70,6 @@ export function toDisplayNumber(value: number, quantity: TypedQuantity, units: U
   return value / memberUnits[quantity][units].factor;
 }
 
-/** The way back from `toDisplayNumber`. */
-export function fromDisplayNumber(shown: number, quantity: TypedQuantity, units: UnitSystem): number {
-  return shown * memberUnits[quantity][units].factor;
-}
-
 /** A stored value as the member reads it. */
 export function formatQuantity(value: number, quantity: TypedQuantity, units: UnitSystem): Shown {
   const { min, max } = places[quantity][units];

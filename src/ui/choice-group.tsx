@@ -27,11 +27,6 @@ function Option({ label, hint, ...input }: OptionProps) {
   );
 }
 
-/** One yes or no. */
-export function Checkbox(props: Omit<OptionProps, "type">) {
-  return <Option {...props} type="checkbox" />;
-}
-
 export interface ChoiceGroupProps
   extends FieldTexts,
     Omit<ComponentProps<"input">, "className" | "id" | "value" | "type"> {

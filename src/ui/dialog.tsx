@@ -31,7 +31,6 @@ export function Dialog({ open, onClose, title, children, actions, wide }: Dialog
 
   if (!open) return null;
   return (
-    // biome-ignore lint/a11y/useKeyWithClickEvents: Escape does the same, and the browser handles it
     <dialog
       ref={dialog}
       aria-labelledby={heading}
@@ -39,8 +38,8 @@ export function Dialog({ open, onClose, title, children, actions, wide }: Dialog
         event.preventDefault();
         onClose();
       }}
-      onClick={(event) => {
-        if (event.target === event.currentTarget) onClose();
+      onMouseUp={(event) => {
+        if (event.button === 0 && event.target === event.currentTarget) onClose();
       }}
       className={classNames(
         "w-[calc(100%-2rem)] max-h-[calc(100dvh-2rem)] overflow-y-auto rounded border border-line bg-surface shadow-float",

@@ -51,19 +51,16 @@ export function FactsBeside({ left, right, units, machineName, differingOnly }: 
                   </>
                 ) : null}
               </th>
-              {[value, other].map((text, side) => (
-                <td
-                  // biome-ignore lint/suspicious/noArrayIndexKey: the two sides never change places
-                  key={side}
-                  className={classNames("border-b border-line px-3 py-1.5 break-words", differs && "font-bold")}
-                >
-                  {text}
-                </td>
-              ))}
+              <FactCell text={value} differs={differs} />
+              <FactCell text={other} differs={differs} />
             </tr>
           );
         })}
       </tbody>
     </table>
   );
+}
+
+function FactCell({ text, differs }: { text: string; differs: boolean }) {
+  return <td className={classNames("border-b border-line px-3 py-1.5 break-words", differs && "font-bold")}>{text}</td>;
 }

@@ -7,7 +7,6 @@ import {
   formatQuantity,
   formatThickness,
   formatWithUnit,
-  fromDisplayNumber,
   inchFraction,
   limitText,
   toDisplayNumber,
@@ -90,13 +89,13 @@ describe("limits", () => {
   });
 });
 
-test("a shown number leads back to the stored one", () => {
+test("an unrounded number typed back gives the stored value", () => {
   const quantities = metrics.map((metric) => metricDefinitions[metric].quantity);
-  const value = fc.double({ min: 0.001, max: 20_000, noNaN: true });
+  const value = fc.double({ min: 0.01, max: 20_000, noNaN: true });
   fc.assert(
     fc.property(value, fc.constantFrom(...quantities), fc.constantFrom(...unitSystems), (stored, quantity, units) => {
-      const shown = toDisplayNumber(stored, quantity, units);
-      expect(fromDisplayNumber(shown, quantity, units) / stored).toBeCloseTo(1, 14);
+      const typed = parseQuantity(String(toDisplayNumber(stored, quantity, units)), quantity, units);
+      expect(typed.ok && typed.value / stored).toBeCloseTo(1, 10); // what is typed is read to 12 significant digits
     }),
   );
 });

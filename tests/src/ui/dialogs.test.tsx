@@ -45,7 +45,7 @@ test("closes on a press beside it, not on one inside it", async () => {
   await userEvent.click(screen.getByRole("button", { name: "Show" }));
   await userEvent.click(screen.getByText("Numbers, no name"));
   expect(screen.queryByRole("dialog")).not.toBeNull();
-  fireEvent.click(screen.getByRole("dialog"));
+  await userEvent.click(screen.getByRole("dialog"));
   expect(screen.queryByRole("dialog")).toBeNull();
 });
 

@@ -2,7 +2,7 @@ import { render, screen } from "@testing-library/react";
 import userEvent from "@testing-library/user-event";
 import { useState } from "react";
 import { expect, test, vi } from "vitest";
-import { Checkbox, ChoiceGroup } from "../../../src/ui/choice-group.tsx";
+import { ChoiceGroup } from "../../../src/ui/choice-group.tsx";
 import { QuantityField, type QuantityReading } from "../../../src/ui/quantity-field.tsx";
 import { SelectField } from "../../../src/ui/select-field.tsx";
 import { TextAreaField, TextField } from "../../../src/ui/text-field.tsx";
@@ -115,12 +115,4 @@ test("checkboxes show the values they are given", () => {
   render(<ChoiceGroup label="Start" name="start" type="checkbox" choices={starts} value={["contact"]} />);
   const checked = screen.getAllByRole<HTMLInputElement>("checkbox").map((box) => box.checked);
   expect(checked).toEqual([false, true]);
-});
-
-test("a single checkbox is switched by its words", async () => {
-  render(<Checkbox label="List it, nameless" hint="Others see the numbers" name="listed" />);
-  const box = screen.getByRole<HTMLInputElement>("checkbox", { name: "List it, nameless" });
-  await userEvent.click(screen.getByText("List it, nameless"));
-  expect(box.checked).toBe(true);
-  expect(descriptionOf(box)).toBe("Others see the numbers");
 });
