@@ -9,6 +9,11 @@ import { createRouter } from "./router.tsx";
 
 const queries = createQueryClient();
 
+// Browsers may keep a page whole and bring it back on "back", after a sign-out too: as it was left, with figures and names.
+window.addEventListener("pageshow", (event) => {
+  if (event.persisted) window.location.reload();
+});
+
 createRoot(document.querySelector("#root")!).render(
   <StrictMode>
     <QueryClientProvider client={queries}>

@@ -1,4 +1,5 @@
 const prefix = "draft:";
+const writerKey = "drafts-of";
 
 /** What was typed into a form and not yet sent, kept for this tab only, so an ended session or a reload loses nothing. */
 export function readDraft(formId: string): Record<string, unknown> | undefined {
@@ -31,6 +32,17 @@ export function dropAllDrafts(): void {
   try {
     const names = Object.keys(sessionStorage).filter((name) => name.startsWith(prefix));
     for (const name of names) sessionStorage.removeItem(name);
+  } catch {
+    // nothing was kept either
+  }
+}
+
+/** Somebody else at this screen, after a session that ended by itself, must not find them either. */
+export function dropDraftsOfOthers(userId: string): void {
+  try {
+    const writer = sessionStorage.getItem(writerKey);
+    if (writer !== null && writer !== userId) dropAllDrafts();
+    sessionStorage.setItem(writerKey, userId);
   } catch {
     // nothing was kept either
   }

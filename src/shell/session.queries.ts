@@ -1,12 +1,29 @@
 import { queryOptions, useMutation, useQueryClient, useSuspenseQuery } from "@tanstack/react-query";
 import { changePreferences, getSession, type Session, signOut } from "#shared/contracts/accounts.ts";
 import { call } from "../lib/api.ts";
-import { dropAllDrafts } from "../lib/draft.ts";
+import { dropAllDrafts, dropDraftsOfOthers } from "../lib/draft.ts";
+import { sessionKey } from "../lib/query-client.ts";
 import { showToast } from "../ui/toast-store.ts";
 
+/** What decides which pages a person may read. */
+const rightsOf = ({ user, shop, admin }: Session) =>
+  JSON.stringify([user?.id, shop?.id, shop?.state, shop?.role, admin]);
+
+/**
+ * Who is signed in. Where that is no longer who it was (signed out in another tab, suspended, another person), everything
+ * this tab holds was for somebody else: it is dropped, and what is on the screen is asked for again.
+ */
 export const sessionQuery = queryOptions({
-  queryKey: ["session"],
-  queryFn: ({ signal }) => call(getSession, {}, signal),
+  queryKey: sessionKey,
+  queryFn: async ({ signal, client }) => {
+    const before = client.getQueryData<Session>(sessionKey);
+    const now = await call(getSession, {}, signal);
+    if (now.user) dropDraftsOfOthers(now.user.id);
+    if (before && rightsOf(before) !== rightsOf(now)) {
+      void client.resetQueries({ predicate: ({ queryKey }) => queryKey[0] !== sessionKey[0] });
+    }
+    return now;
+  },
   staleTime: 60_000,
 });
 
