@@ -125,12 +125,13 @@ const reasons = [
 function inventVersions(random: Random, plan: BookPlan, simulated: SimulatedRecipe, recipeId: string, begun: Date) {
   const { setpoints, material, thicknessMm, nozzleMm } = simulated;
   const count = random.pick([1, 1, 1, 2, 2, 3]);
+  const surface = material === "mild-steel" && random.chance(0.3) ? "mill-scale" : "clean";
   return Array.from({ length: count }, (_, i): New<typeof recipeVersions> => {
     // Earlier versions ran a little slower: people creep up on a feed.
     const earlier =
       setpoints.feedMmMin === null
         ? null
-        : Math.max(50, Math.round(setpoints.feedMmMin * (1 - 0.05 * (count - 1 - i))));
+        : Math.max(50, Math.round((setpoints.feedMmMin * (1 - 0.05 * (count - 1 - i))) / 10) * 10);
     return {
       recipeId,
       shopId: plan.shopId,
@@ -138,7 +139,7 @@ function inventVersions(random: Random, plan: BookPlan, simulated: SimulatedReci
       machineId: plan.machine.id,
       material,
       grade: "",
-      surface: material === "mild-steel" && random.chance(0.3) ? "mill-scale" : "clean",
+      surface,
       processGas: "air",
       thicknessMm,
       nozzleMm,
