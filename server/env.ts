@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { LogLevel, parseSettings } from "./settings.ts";
 
 const isLoopback = (url: string) => ["127.0.0.1", "[::1]", "localhost"].includes(new URL(url).hostname);
 
@@ -25,7 +26,7 @@ const Settings = z
     RATE_LIMIT_PER_MINUTE: z.coerce.number().int().min(1).default(600),
     WEB_DIR: z.string().default("dist/web"),
     DEMO: flag,
-    LOG_LEVEL: z.enum(["fatal", "error", "warn", "info", "debug", "silent"]).default("info"),
+    LOG_LEVEL: LogLevel,
   })
   .check(
     // The process speaks plain HTTP, so https means a proxy; unless it is trusted no secure cookie is set and nobody can sign in.
@@ -47,8 +48,5 @@ const Settings = z
 export type Settings = z.infer<typeof Settings>;
 
 export function readSettings(environment: NodeJS.ProcessEnv): Settings {
-  const parsed = Settings.safeParse(environment);
-  if (parsed.success) return parsed.data;
-  const lines = parsed.error.issues.map((issue) => `  ${issue.path.join(".")}: ${issue.message}`);
-  throw new Error(`Settings are missing or wrong (see README, Settings):\n${lines.join("\n")}`);
+  return parseSettings(Settings, environment);
 }

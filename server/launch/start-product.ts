@@ -1,4 +1,5 @@
 import path from "node:path";
+import { commandEnvironmentFile } from "../command-environment.ts";
 import { bootstrapDatabase, roles } from "../db/bootstrap.ts";
 import { migrateDatabase } from "../db/migrate.ts";
 import { type Child, type ChildOptions, startChild } from "./children.ts";
@@ -64,7 +65,7 @@ function leaveForCommands(
   { EDITION_DATABASE_URL, EDITION_MARKS_KEY }: NodeJS.ProcessEnv,
 ): void {
   const settings = { OWNER_DATABASE_URL: ownerUrl, EDITION_DATABASE_URL, EDITION_MARKS_KEY };
-  writePrivateFile(path.join(folder, "environment.json"), `${JSON.stringify(settings, null, 2)}\n`);
+  writePrivateFile(commandEnvironmentFile(folder), `${JSON.stringify(settings, null, 2)}\n`);
 }
 
 async function prepareDatabase(postgres: PostgresServer, secrets: Secrets, say: Say): Promise<void> {

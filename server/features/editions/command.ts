@@ -1,7 +1,6 @@
 /* `npm run edition -- build | publish | list`: editions without the job runner and without a browser. */
-import { existsSync, readFileSync } from "node:fs";
-import path from "node:path";
 import { parseArgs } from "node:util";
+import { readCommandEnvironment } from "#server/command-environment.ts";
 import { violates } from "#server/db/client.ts";
 import { openSession } from "#server/db/session.ts";
 import { readWorkerSettings, type WorkerSettings } from "#server/worker-env.ts";
@@ -18,13 +17,6 @@ const help = `Builds and publishes editions.
   --data DIR   folder of the start command, whose database is used unless EDITION_DATABASE_URL is set (.local)`;
 
 const say = (line: string) => console.log(line);
-
-/** The environment decides; without it, what the start command has left for commands beside it. */
-function readSettings(dataFolder: string): WorkerSettings {
-  const file = path.join(dataFolder, "environment.json");
-  if (process.env.EDITION_DATABASE_URL || !existsSync(file)) return readWorkerSettings(process.env);
-  return readWorkerSettings({ ...JSON.parse(readFileSync(file, "utf8")), ...process.env });
-}
 
 async function build(settings: WorkerSettings): Promise<string> {
   const result = await refuseQueued(
@@ -95,7 +87,7 @@ async function main(): Promise<void> {
     process.exitCode = values.help ? 0 : 1;
     return;
   }
-  const settings = readSettings(values.data);
+  const settings = readWorkerSettings(readCommandEnvironment(values.data, "EDITION_DATABASE_URL"));
   if (command === "list") return list(settings.EDITION_DATABASE_URL);
   if (command === "publish") return publish(settings.EDITION_DATABASE_URL);
   const id = await build(settings);
