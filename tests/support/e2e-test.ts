@@ -67,7 +67,7 @@ export const test = base
     onCleanup(async () => {
       await Promise.all(contexts.map((context) => context.close()));
       expect(watches.flatMap(unexpectedOf)).toEqual([]);
-      const errors = errorsSince(product.folder, before);
+      const errors = takeNewErrors(product.folder);
       expect(errors.filter((line) => !provoked.some((pattern) => pattern.test(line)))).toEqual([]);
     });
     return async ({ width, at = "/" }: OpenOptions): Promise<Page> => {
