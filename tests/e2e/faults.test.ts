@@ -6,8 +6,8 @@ import { mildSteelEighth, recipeForm, typeRecipe } from "#tests/support/e2e-reci
 import { chooseAccount, product, test, widths } from "#tests/support/e2e-test.ts";
 import { expectProblem, expectRefusal } from "#tests/support/e2e-watch.ts";
 
-/** What the servers log while they reach no database, and nothing besides. */
-const withoutDatabase = /"status":503|terminating connection|Connection terminated|database does not answer/;
+/** What the API logs of a request that reached no database, and nothing besides. */
+const withoutDatabase = /"problem":"database-unavailable"|"status":503/;
 
 /** Chooses the owner and follows the provider's redirects up to the address that brings the code to the product. */
 async function walkToCallback(page: Page): Promise<string> {

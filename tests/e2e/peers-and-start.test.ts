@@ -30,7 +30,7 @@ describe.each(widths)("peers and starting recipes, %i px wide", (width) => {
       .waitFor();
     await expectUsable(page);
     await page.goto("/peers/book");
-    await page.getByText("Most unusual first").waitFor();
+    await page.getByText("Most unusual first. Unusual is not wrong").waitFor();
     await expectUsable(page);
   });
 

@@ -1,18 +1,11 @@
-import { existsSync, readFileSync } from "node:fs";
+import { existsSync, readFileSync, writeFileSync } from "node:fs";
 import path from "node:path";
 
 const files = ["api.log", "worker.log"];
 
-export type LogPlace = Record<string, number>;
-
-const read = (folder: string, file: string): string => {
-  const full = path.join(folder, "logs", file);
-  return existsSync(full) ? readFileSync(full, "utf8") : "";
-};
-
-/** Where the logs end now. */
-export const logPlace = (folder: string): LogPlace =>
-  Object.fromEntries(files.map((file) => [file, read(folder, file).length]));
+function textOf(file: string): string {
+  return existsSync(file) ? readFileSync(file, "utf8") : "";
+}
 
 function isError(line: string): boolean {
   if (line.trim() === "") return false;
@@ -23,13 +16,19 @@ function isError(line: string): boolean {
   }
 }
 
-/** Lines of level error or worse that the servers wrote since. */
-export function errorsSince(folder: string, place: LogPlace): string[] {
-  return files.flatMap((file) =>
-    read(folder, file)
-      .slice(place[file])
+/** Lines of level error or worse that the servers wrote since the last call, in whichever test file that was. */
+export function takeNewErrors(folder: string): string[] {
+  const bookmark = path.join(folder, "logs-read.json");
+  const read: Record<string, number> = JSON.parse(textOf(bookmark) || "{}");
+  const errors = files.flatMap((file) => {
+    const text = textOf(path.join(folder, "logs", file));
+    const whole = text.slice(read[file] ?? 0, text.lastIndexOf("\n") + 1); // a line being written waits for the next call
+    read[file] = (read[file] ?? 0) + whole.length;
+    return whole
       .split("\n")
       .filter(isError)
-      .map((line) => `${file}: ${line}`),
-  );
+      .map((line) => `${file}: ${line}`);
+  });
+  writeFileSync(bookmark, JSON.stringify(read));
+  return errors;
 }
