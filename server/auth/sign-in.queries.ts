@@ -33,20 +33,24 @@ export async function insertUser(tx: Db, values: typeof users.$inferInsert): Pro
   return row;
 }
 
-/** Makes the person a member where they are none yet and an open invitation waits for their e-mail. */
-export async function acceptInvitation(tx: Db, userId: string, email: string): Promise<void> {
+/**
+ * Makes the person a member where they are none yet and an open invitation waits for their e-mail.
+ * @returns the shop they have joined by it
+ */
+export async function acceptInvitation(tx: Db, userId: string, email: string): Promise<string | undefined> {
   const [invitation] = await tx
     .select()
     .from(invitations)
     .where(and(eq(invitations.email, email), isNull(invitations.acceptedAt)))
     .orderBy(invitations.createdAt)
     .limit(1);
-  if (!invitation) return;
+  if (!invitation) return undefined;
   const joined = await tx
     .insert(memberships)
     .values({ userId, shopId: invitation.shopId, role: invitation.role })
     .onConflictDoNothing()
     .returning({ userId: memberships.userId });
-  if (joined.length === 0) return;
+  if (joined.length === 0) return undefined;
   await tx.update(invitations).set({ acceptedAt: sql`now()` }).where(eq(invitations.id, invitation.id));
+  return invitation.shopId;
 }

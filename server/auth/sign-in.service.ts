@@ -1,4 +1,5 @@
 import type { Db } from "#server/db/client.ts";
+import { emptyTellingTexts } from "../features/sharing/telling-texts.service.ts";
 import { actAs } from "../http/actor.queries.ts";
 import { acceptInvitation, bindPreparedUser, findUserByIdentity, insertUser, type UserRow } from "./sign-in.queries.ts";
 import type { Identity } from "./strategy.ts";
@@ -25,10 +26,17 @@ export function findOrMakeUser(db: Db, provider: string, identity: Identity): Pr
     const user = known ?? (await makeUser(tx, provider, identity));
     if (verified) {
       await actAs(tx, { user_id: user.id });
-      await acceptInvitation(tx, user.id, email);
+      const joined = await acceptInvitation(tx, user.id, email);
+      if (joined) await greetInShop(tx, joined);
     }
     return user.id;
   });
+}
+
+/** A name more that must not stand in what the shop has written for others. */
+async function greetInShop(tx: Db, shopId: string): Promise<void> {
+  await actAs(tx, { shop_id: shopId });
+  await emptyTellingTexts(tx, shopId);
 }
 
 async function makeUser(tx: Db, provider: string, { sub, email, name }: Identity): Promise<UserRow> {

@@ -1,4 +1,5 @@
 import { type Db, databaseError, violates } from "#server/db/client.ts";
+import { emptyTellingTexts } from "#server/features/sharing/telling-texts.service.ts";
 import type { ShopActor } from "#server/http/actor.ts";
 import { ProblemError } from "#server/http/problem.ts";
 import type { Machine, MachineInput } from "#shared/contracts/machines.ts";
@@ -40,6 +41,7 @@ export async function getMachine(tx: Db, actor: ShopActor, id: string): Promise<
 
 export async function createMachine(tx: Db, actor: ShopActor, input: MachineInput): Promise<Machine> {
   const row = await refuseTakenName(queries.insertMachine(tx, { ...input, shopId: actor.shopId }));
+  await emptyTellingTexts(tx, actor.shopId);
   return present(row, 0);
 }
 
@@ -52,6 +54,7 @@ export async function updateMachine(
   const before = await getMachine(tx, actor, id);
   const row = await refuseTakenName(queries.updateMachine(tx, actor.shopId, id, baseVersion, input));
   if (!row) throw new ProblemError("stale-version", { current: before });
+  if (row.name !== before.name) await emptyTellingTexts(tx, actor.shopId);
   return present(row, before.recipes);
 }
 

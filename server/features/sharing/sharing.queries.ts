@@ -1,9 +1,11 @@
-import { and, asc, desc, eq, isNotNull, sql } from "drizzle-orm";
+import { and, asc, desc, eq, isNotNull, ne, sql } from "drizzle-orm";
 import type { Db } from "#server/db/client.ts";
+import { machines } from "#server/db/schema/machines.ts";
 import { memberships } from "#server/db/schema/memberships.ts";
 import { recipeVersions } from "#server/db/schema/recipe-versions.ts";
 import { recipes } from "#server/db/schema/recipes.ts";
 import { shares } from "#server/db/schema/shares.ts";
+import { shops } from "#server/db/schema/shops.ts";
 import { users } from "#server/db/schema/users.ts";
 
 export type ShareRow = typeof shares.$inferSelect;
@@ -26,6 +28,31 @@ export async function saveShare(tx: Db, values: Omit<ShareRow, "sharedAt">): Pro
 
 export async function deleteShare(tx: Db, shopId: string, recipeId: string): Promise<void> {
   await tx.delete(shares).where(and(eq(shares.recipeId, recipeId), eq(shares.shopId, shopId)));
+}
+
+/** Shares with words for others. */
+export function listTexts(tx: Db, shopId: string): Promise<ShareRow[]> {
+  return tx
+    .select()
+    .from(shares)
+    .where(and(eq(shares.shopId, shopId), ne(shares.publicText, "")));
+}
+
+export async function emptyText(tx: Db, shopId: string, recipeId: string): Promise<void> {
+  await tx
+    .update(shares)
+    .set({ publicText: "" })
+    .where(and(eq(shares.recipeId, recipeId), eq(shares.shopId, shopId)));
+}
+
+export async function findShopName(tx: Db, shopId: string): Promise<string> {
+  const [row] = await tx.select({ name: shops.name }).from(shops).where(eq(shops.id, shopId));
+  return row!.name; // asked of the actor's own shop
+}
+
+export async function listMachineNames(tx: Db, shopId: string): Promise<string[]> {
+  const rows = await tx.select({ name: machines.name }).from(machines).where(eq(machines.shopId, shopId));
+  return rows.map((row) => row.name);
 }
 
 export async function listPeopleNames(tx: Db, shopId: string): Promise<string[]> {

@@ -1,7 +1,7 @@
 import type { z } from "zod";
 import type { Db } from "#server/db/client.ts";
 import { appendAudit } from "#server/features/audit/audit.service.ts";
-import { listMachines, requireMachine } from "#server/features/machines/machines.service.ts";
+import { requireMachine } from "#server/features/machines/machines.service.ts";
 import { getRecipe, lockRecipe } from "#server/features/recipes/recipes.service.ts";
 import type { ShopActor } from "#server/http/actor.ts";
 import { ProblemError } from "#server/http/problem.ts";
@@ -12,6 +12,7 @@ import { type OwnNames, screenText, textRefusalWords } from "#shared/disclosure/
 import { peerGroupId, peerGroupOf } from "#shared/peers/peer-group.ts";
 import { type PreviewSubject, previewSharing, subjectOf } from "./preview.ts";
 import * as queries from "./sharing.queries.ts";
+import { ownNames } from "./telling-texts.service.ts";
 
 type Input = z.output<typeof SharingInput>;
 
@@ -58,7 +59,7 @@ export async function changeSharing(tx: Db, actor: ShopActor, id: string, input:
 }
 
 async function refuseTellingText(tx: Db, actor: ShopActor, text: string): Promise<void> {
-  const refusals = refusalsOf(text, await ownNames(tx, actor));
+  const refusals = refusalsOf(text, await ownNames(tx, actor.shopId));
   if (refusals.length === 0) return;
   throw new ProblemError("invalid-request", {
     errors: refusals.map((detail) => ({ pointer: "/publicText", detail })),
@@ -69,22 +70,13 @@ function refusalsOf(text: string, own: OwnNames): string[] {
   return screenText(text, own).map((reason) => textRefusalWords[reason]);
 }
 
-async function ownNames(tx: Db, actor: ShopActor): Promise<Required<OwnNames>> {
-  const machines = await listMachines(tx, actor);
-  return {
-    shop: actor.shopName,
-    people: await queries.listPeopleNames(tx, actor.shopId),
-    machines: machines.map(({ name }) => name),
-  };
-}
-
 async function subjectFor(tx: Db, actor: ShopActor, recipe: Recipe): Promise<PreviewSubject> {
   const { number, content } = recipe.version;
   const provenAt = await queries.findProvenAt(tx, actor.shopId, recipe.id, number);
   return {
     recipe,
     machine: await requireMachine(tx, actor, content.machineId),
-    own: await ownNames(tx, actor),
+    own: await ownNames(tx, actor.shopId),
     provenAt: provenAt?.toISOString() ?? null,
     units: actor.units,
   };

@@ -148,6 +148,29 @@ test("text that names the shop, its people or machines, or leads to them, is ref
   expect(kept.rows).toEqual([]);
 });
 
+test("words that hold a name the shop takes later are emptied before an edition shows them", async () => {
+  const { recipe } = await makeProven("stainless-steel", { thicknessMm: 2 });
+  const { recipe: other } = await makeProven("stainless-steel", { thicknessMm: 4 });
+  const telling = "Best on Fernhollow, slowly.";
+  expect((await put(recipe.id, "listed", telling)).body.publicText).toBe(telling);
+  await put(other.id, "listed", "Clean edge.");
+  const client = await api.as(own.boss.id);
+  const { id, version, ...table } = (await client.get(`/api/machines/${machine.id}`)).body;
+  const wordsOf = async (id: string) => (await client.get(`/api/recipes/${id}/sharing`)).body.publicText;
+  const rename = (name: string, baseVersion: number) =>
+    client.put(`/api/machines/${id}`).send({ ...table, name, baseVersion });
+  await rename("Fernhollow", version).expect(200);
+  expect([await wordsOf(recipe.id), await wordsOf(other.id)]).toEqual(["", "Clean edge."]);
+  await rename(table.name, version + 1).expect(200);
+
+  await put(recipe.id, "listed", telling);
+  await client
+    .post("/api/machines")
+    .send({ ...table, name: "Fernhollow" })
+    .expect(201);
+  expect([await wordsOf(recipe.id), await wordsOf(other.id)]).toEqual(["", "Clean edge."]);
+});
+
 test("words typed for a recipe that is only counted are not kept", async () => {
   const { recipe } = await makeProven("stainless-steel", { thicknessMm: 1 });
   expect((await put(recipe.id, "counted", "Clean edge.")).body.publicText).toBe("");
