@@ -1,7 +1,7 @@
 import { z } from "zod";
 import { materials, processGases } from "../materials/materials.ts";
 import { PeerGroupKey } from "../peers/peer-group.ts";
-import { type Metric, metrics } from "../recipes/metrics.ts";
+import { forEachMetric, metrics } from "../recipes/metrics.ts";
 import { drynessLevels, heightControls, startMethods } from "./machines.ts";
 
 /** All that is ever said about how many shops or recipes stand behind a figure. "3-4" needs a quorum set below 5. */
@@ -50,17 +50,13 @@ export const ReleasedDistribution = z.object({
 });
 export type ReleasedDistribution = z.infer<typeof ReleasedDistribution>;
 
-const distributionsByMetric = Object.fromEntries(
-  metrics.map((metric) => [metric, ReleasedDistribution.nullable()]),
-) as unknown as Record<Metric, z.ZodNullable<typeof ReleasedDistribution>>; // fromEntries forgets the key type
-
 export const ReleasedGroup = z.object({
   status: z.literal("released"),
   key: PeerGroupKey,
   shops: CountBand,
   recipes: CountBand,
   figuresFrom: EditionRef.describe("The edition these figures were computed for: older than the one shown where held"),
-  distributions: z.object(distributionsByMetric),
+  distributions: z.object(forEachMetric(() => ReleasedDistribution.nullable())),
   acceptableShare: z
     .number()
     .min(0.05)
@@ -100,10 +96,6 @@ export const MachineTraits = z.object({
 });
 export type MachineTraits = z.infer<typeof MachineTraits>;
 
-const roundedSetpoints = Object.fromEntries(
-  metrics.map((metric) => [metric, z.number().nullable()]),
-) as unknown as Record<Metric, z.ZodNullable<z.ZodNumber>>; // fromEntries forgets the key type
-
 /** A nameless copy of a shared recipe. Its id is random and says nothing about any other record. */
 export const ListedRecipe = z.object({
   id: z.uuid(),
@@ -111,7 +103,7 @@ export const ListedRecipe = z.object({
   thicknessMm: z.number().describe("To 0.1 mm"),
   nozzleMm: z.number().describe("To 0.1 mm"),
   gas: z.enum(processGases),
-  setpoints: z.object(roundedSetpoints),
+  setpoints: z.object(forEachMetric(() => z.number().nullable())),
   quarter: z.string().regex(/^\d{4}-Q[1-4]$/),
   text: z.string().nullable().describe("What the owner typed for others to read, screened"),
   traits: MachineTraits,

@@ -1,6 +1,6 @@
 import { z } from "zod";
 import { materials, processGases } from "../materials/materials.ts";
-import { type Metric, metrics } from "../recipes/metrics.ts";
+import { forEachMetric, metrics } from "../recipes/metrics.ts";
 import { EditionRef } from "./released-figures.ts";
 
 /** What a setpoint's value stands on, best first. */
@@ -78,11 +78,6 @@ export const TestPlanStep = z.object({
 });
 export type TestPlanStep = z.infer<typeof TestPlanStep>;
 
-const setpointsByMetric = Object.fromEntries(metrics.map((metric) => [metric, StartingSetpoint])) as unknown as Record<
-  Metric,
-  typeof StartingSetpoint
->; // fromEntries forgets the key type
-
 /** A starting recipe as shown, exported and kept. `schemaVersion` goes up with any change a reader would stumble over. */
 export const StartingRecipe = z.object({
   schemaVersion: z.literal(1),
@@ -93,7 +88,7 @@ export const StartingRecipe = z.object({
   edition: EditionRef.nullable().describe("The edition its peers' figures come from; null where it uses none"),
   groupId: z.string().nullable(),
   nozzle: NozzleAdvice,
-  setpoints: z.object(setpointsByMetric),
+  setpoints: z.object(forEachMetric(() => StartingSetpoint)),
   limits: z.array(LimitHit),
   heatCheck: StartingHeatCheck.nullable(),
   cautions: z.array(Caution),

@@ -1,12 +1,7 @@
-import type {
-  EditionRef,
-  PeerGroupFigures,
-  ReleasedDistribution,
-  ReleasedGroup,
-} from "../contracts/released-figures.ts";
+import type { EditionRef, PeerGroupFigures, ReleasedDistribution } from "../contracts/released-figures.ts";
 import type { Contribution } from "../peers/contribution.ts";
 import { type PeerGroupKey, peerGroupId } from "../peers/peer-group.ts";
-import { type Metric, metrics } from "../recipes/metrics.ts";
+import { forEachMetric, type Metric } from "../recipes/metrics.ts";
 import { requireThat } from "../stats/require-that.ts";
 import { acceptableShare } from "./acceptable-share.ts";
 import { countBandOf } from "./count-bands.ts";
@@ -51,14 +46,13 @@ export function releaseGroup(
     figuresFrom: edition,
   };
   const { shops, recipes, figuresFrom } = steps.whole.decision === "keep old figures" && old ? old : counted;
-  const distributions = Object.fromEntries(metrics.map((metric) => [metric, distributionOf(metric)]));
   return {
     status: "released",
     key,
     shops,
     recipes,
     figuresFrom,
-    distributions: distributions as ReleasedGroup["distributions"], // one for each metric
+    distributions: forEachMetric(distributionOf),
     acceptableShare: byStep(steps.acceptable.decision, old?.acceptableShare, () =>
       acceptableShare(contributions, parameters),
     ),

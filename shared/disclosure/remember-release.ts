@@ -1,6 +1,6 @@
 import type { PeerGroupFigures, ReleasedGroup } from "../contracts/released-figures.ts";
 import type { Contribution } from "../peers/contribution.ts";
-import { metrics } from "../recipes/metrics.ts";
+import { forEachMetric } from "../recipes/metrics.ts";
 import { figureSteps } from "./figure-steps.ts";
 import { type Digest, type FigureName, forEachFigure, type GroupMemory, ledgerOf, plainDigest } from "./ledger.ts";
 import type { DisclosureParameters } from "./parameters.ts";
@@ -34,12 +34,11 @@ export function rememberRelease(
 /** A metric that is not shown now keeps the figures it last had: members who kept them can still subtract. */
 function lastShown(figures: PeerGroupFigures, previous: GroupMemory | null): ReleasedGroup {
   if (figures.status === "withheld") return previous!.figures; // remembered only where something was shown
-  const distributions = metrics.map(
-    (metric) => [metric, figures.distributions[metric] ?? previous?.figures.distributions[metric] ?? null] as const,
-  );
   return {
     ...figures,
     acceptableShare: figures.acceptableShare ?? previous?.figures.acceptableShare ?? null,
-    distributions: Object.fromEntries(distributions) as ReleasedGroup["distributions"],
+    distributions: forEachMetric(
+      (metric) => figures.distributions[metric] ?? previous?.figures.distributions[metric] ?? null,
+    ),
   };
 }

@@ -1,4 +1,4 @@
-import { type Metric, metrics, type Setpoints } from "../recipes/metrics.ts";
+import { forEachMetric, type Metric, type Setpoints } from "../recipes/metrics.ts";
 
 /** Steps per unit rather than the step: n/20 is exact to the last digit where n·0.05 is not. Feed has no fixed step. */
 const stepsPerUnit: Record<Exclude<Metric, "feedMmMin">, number> = {
@@ -26,11 +26,10 @@ export function roundingStep(metric: Metric, value: number): number {
 }
 
 export function roundSetpoints(setpoints: Setpoints): Setpoints {
-  const rounded = metrics.map((metric) => {
+  return forEachMetric((metric) => {
     const value = setpoints[metric];
-    return [metric, value === null ? null : roundForRelease(metric, value)] as const;
+    return value === null ? null : roundForRelease(metric, value);
   });
-  return Object.fromEntries(rounded) as Setpoints; // fromEntries forgets the key type
 }
 
 /** To 0.1 mm: enough to cut by, too coarse to tell one shop's sheet from another's. */

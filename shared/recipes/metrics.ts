@@ -14,6 +14,12 @@ export const metrics = [
 ] as const;
 export type Metric = (typeof metrics)[number];
 
+/** One value for each metric, made in the metrics' order. */
+export function forEachMetric<Value>(make: (metric: Metric) => Value): Record<Metric, Value> {
+  const made = metrics.map((metric) => [metric, make(metric)] as const);
+  return Object.fromEntries(made) as Record<Metric, Value>; // fromEntries forgets the key type
+}
+
 /** A full or partial set of setpoints, each in the unit its key names. A missing one is null. */
 export type Setpoints = Record<Metric, number | null>;
 

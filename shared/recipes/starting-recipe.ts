@@ -4,7 +4,7 @@ import { heatCheck } from "../materials/heat-check.ts";
 import { peerGroupId, peerGroupOf } from "../peers/peer-group.ts";
 import { cautionsFor } from "../safety/cautions.ts";
 import { applyMachineLimits } from "./machine-limits.ts";
-import { type Metric, metrics } from "./metrics.ts";
+import { forEachMetric, type Metric } from "./metrics.ts";
 import { adviseNozzle } from "./nozzle-advice.ts";
 import { peersEstimate } from "./peers-estimate.ts";
 import { noEstimate, practiceEstimate } from "./practice-estimate.ts";
@@ -26,8 +26,7 @@ export function startingRecipe(input: StartingRecipeInput): StartingRecipe {
   const group = nozzle.nozzleMm === null ? null : findGroup(input, nozzle.nozzleMm);
   const open: EstimateContext = { ...input, nozzleMm: nozzle.nozzleMm, group, cutHeightMm: null };
   const context = { ...open, cutHeightMm: estimate("cutHeightMm", open).value };
-  const estimated = Object.fromEntries(metrics.map((metric) => [metric, estimate(metric, context)]));
-  const whole = keepPierceAboveCut(estimated as StartingRecipe["setpoints"]); // one for each metric
+  const whole = keepPierceAboveCut(forEachMetric((metric) => estimate(metric, context)));
   const { setpoints, limits } = applyMachineLimits(whole, input.machine, input.units);
   return {
     schemaVersion: 1,

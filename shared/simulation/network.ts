@@ -1,5 +1,5 @@
 import type { Material } from "../materials/materials.ts";
-import { type Metric, metricDefinitions, metrics, type Setpoints } from "../recipes/metrics.ts";
+import { forEachMetric, type Metric, metricDefinitions, metrics, type Setpoints } from "../recipes/metrics.ts";
 import { barPerPsi, mmPerInch } from "../units/units.ts";
 import { idealSetpoints, usualNozzleMm, usualVariation, type Variation } from "./cut-model.ts";
 import type { Random } from "./random.ts";
@@ -24,11 +24,11 @@ export interface SimulatedRecipe {
 }
 
 export function simulateMachine(random: Random, variation: Variation = usualVariation): SimulatedMachine {
-  const habit = Object.fromEntries(metrics.map((metric) => [metric, random.normal() * variation.between[metric]]));
+  const habit = forEachMetric((metric) => random.normal() * variation.between[metric]);
   return {
     maxCurrentA: random.pick([45, 60, 65, 65, 85, 105]),
     topFeedMmMin: random.pick([6000, 8000, 10_000, 12_000, 15_000]),
-    habit: habit as Record<Metric, number>,
+    habit,
   };
 }
 

@@ -5,7 +5,7 @@ import type { ReleasedGroup } from "#shared/contracts/released-figures.ts";
 import type { DisclosureParameters } from "#shared/disclosure/parameters.ts";
 import { networkFigures } from "#shared/peers/network-figures.ts";
 import { type PeerGroupKey, peerGroupId } from "#shared/peers/peer-group.ts";
-import { metrics } from "#shared/recipes/metrics.ts";
+import { forEachMetric } from "#shared/recipes/metrics.ts";
 import * as queries from "./build-edition.queries.ts";
 import { type BuiltGroup, buildGroup, type GroupBefore, type SharedRecipe } from "./build-group.ts";
 import { canonicalJson } from "./canonical-json.ts";
@@ -120,9 +120,9 @@ class Summary {
 
 /** The curves are most of a group's size, and nothing about the network is made from them. */
 function withoutCurves(group: ReleasedGroup): ReleasedGroup {
-  const distributions = metrics.map((metric) => {
+  const distributions = forEachMetric((metric) => {
     const distribution = group.distributions[metric];
-    return [metric, distribution && { ...distribution, density: null }] as const;
+    return distribution && { ...distribution, density: null };
   });
-  return { ...group, distributions: Object.fromEntries(distributions) as ReleasedGroup["distributions"] };
+  return { ...group, distributions };
 }

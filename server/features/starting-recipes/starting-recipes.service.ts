@@ -7,7 +7,7 @@ import { ProblemError } from "#server/http/problem.ts";
 import type { Recipe, RecipeContent, RecipeOrigin } from "#shared/contracts/recipes.ts";
 import type { StartingRecipe } from "#shared/contracts/starting-recipe-figures.ts";
 import type { StartingRecipeQuery } from "#shared/contracts/starting-recipes.ts";
-import { type Metric, metrics } from "#shared/recipes/metrics.ts";
+import { forEachMetric } from "#shared/recipes/metrics.ts";
 import { startingRecipe } from "#shared/recipes/starting-recipe.ts";
 
 /** From the shop's machine and the current edition alone. */
@@ -31,7 +31,7 @@ export async function saveStartingRecipe(tx: Db, actor: ShopActor, query: Starti
   const origin: RecipeOrigin = {
     kind: "starting-recipe",
     editionNumber: recipe.edition?.number ?? null,
-    basis: Object.fromEntries(metrics.map((metric) => [metric, recipe.setpoints[metric].basis])),
+    basis: forEachMetric((metric) => recipe.setpoints[metric].basis),
   };
   return createRecipe(tx, actor, { content: contentOf(recipe, query.machineId), reason: "" }, origin);
 }
@@ -42,7 +42,6 @@ function contentOf(recipe: StartingRecipe, machineId: string): RecipeContent {
     const errors = [{ pointer: "/nozzleMm", detail: "Nobody knows a nozzle for this: choose one" }];
     throw new ProblemError("invalid-request", { errors });
   }
-  const values = metrics.map((metric) => [metric, recipe.setpoints[metric].value] as const);
   return {
     machineId,
     material: recipe.material,
@@ -51,7 +50,7 @@ function contentOf(recipe: StartingRecipe, machineId: string): RecipeContent {
     processGas: recipe.gas,
     thicknessMm: recipe.thicknessMm,
     nozzleMm,
-    setpoints: Object.fromEntries(values) as Record<Metric, number | null>,
+    setpoints: forEachMetric((metric) => recipe.setpoints[metric].value),
     note: "",
   };
 }

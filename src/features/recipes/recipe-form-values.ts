@@ -3,7 +3,7 @@ import { z } from "zod";
 import { RecipeContent } from "#shared/contracts/recipes.ts";
 import type { Material, ProcessGas, Surface } from "#shared/materials/materials.ts";
 import { checkSetpoint, fieldLimits, type LimitedField, type RecipeFigures } from "#shared/recipes/limits.ts";
-import { type Metric, metrics } from "#shared/recipes/metrics.ts";
+import { forEachMetric, type Metric, metrics } from "#shared/recipes/metrics.ts";
 import { editText, formatWithUnit } from "#shared/units/format.ts";
 import { parseQuantity } from "#shared/units/parse.ts";
 import type { UnitSystem } from "#shared/units/units.ts";
@@ -68,9 +68,8 @@ export function figuresSoFar(values: RecipeFormValues, units: UnitSystem): Requi
     const figure = readFigure(text, { field, units, material: values.material });
     return figure.ok ? figure.value : null;
   };
-  const setpoints = Object.fromEntries(metrics.map((metric) => [metric, read(metric, values.setpoints[metric])]));
   return {
-    ...(setpoints as Record<Metric, number | null>), // fromEntries forgets the key type
+    ...forEachMetric((metric) => read(metric, values.setpoints[metric])),
     thicknessMm: read("thicknessMm", values.thicknessMm),
     nozzleMm: read("nozzleMm", values.nozzleMm),
   };
@@ -93,9 +92,7 @@ export function recipeFormSchema(units: UnitSystem): z.ZodType<RecipeFormOutput,
       if (value === null) refuse([field], "Fill this in");
       return value ?? Number.NaN;
     };
-    const setpoints = Object.fromEntries(
-      metrics.map((metric) => [metric, take(metric, values.setpoints[metric], ["setpoints", metric])]),
-    );
+    const setpoints = forEachMetric((metric) => take(metric, values.setpoints[metric], ["setpoints", metric]));
     const { reason, baseVersion, ...rest } = values;
     const thicknessMm = needed("thicknessMm");
     const nozzleMm = needed("nozzleMm");
@@ -109,8 +106,6 @@ export function recipeFormSchema(units: UnitSystem): z.ZodType<RecipeFormOutput,
   });
 }
 
-const noSetpoints = Object.fromEntries(metrics.map((metric) => [metric, ""])) as Record<Metric, string>;
-
 export function emptyRecipe(machineId: string): RecipeFormValues {
   return {
     machineId,
@@ -120,7 +115,7 @@ export function emptyRecipe(machineId: string): RecipeFormValues {
     processGas: "air",
     thicknessMm: "",
     nozzleMm: "",
-    setpoints: noSetpoints,
+    setpoints: forEachMetric(() => ""),
     note: "",
     reason: "",
     baseVersion: 0,
@@ -135,10 +130,7 @@ export function recipeValues(content: RecipeContent, units: UnitSystem, baseVers
     ...content,
     thicknessMm: text("thicknessMm", content.thicknessMm),
     nozzleMm: text("nozzleMm", content.nozzleMm),
-    setpoints: Object.fromEntries(metrics.map((metric) => [metric, text(metric, content.setpoints[metric])])) as Record<
-      Metric,
-      string
-    >, // fromEntries forgets the key type
+    setpoints: forEachMetric((metric) => text(metric, content.setpoints[metric])),
     reason: "",
     baseVersion,
   };
