@@ -68,7 +68,7 @@ export function Tabs({ label, tabs, selected, onSelect }: TabsProps) {
           </button>
         ))}
       </div>
-      {/* biome-ignore lint/a11y/noNoninteractiveTabindex: a panel without controls must still be reachable */}
+      {/* In the order of the Tab key, because a panel without controls must still be reachable. */}
       <div role="tabpanel" id={`${id}-panel`} aria-labelledby={`${id}-${current?.key}`} tabIndex={0} className="pt-4">
         {current?.content}
       </div>

@@ -52,7 +52,7 @@ export function PeerMap({ layout, label, units }: PeerMapProps) {
 
   return (
     <div ref={box} className="overflow-x-auto" data-keep-colour="">
-      {/* biome-ignore-start lint/a11y: a table element cannot hold a drawing; the table in words stands below the map */}
+      {/* A grid by role, because a table element cannot hold a drawing; the table in words stands below the map. */}
       <svg
         ref={grid}
         role="grid"
@@ -84,7 +84,6 @@ export function PeerMap({ layout, label, units }: PeerMapProps) {
           </Group.Group>
         ))}
       </svg>
-      {/* biome-ignore-end lint/a11y: only the drawing needs it */}
     </div>
   );
 }
