@@ -1,5 +1,6 @@
 import { and, asc, count, eq, sql } from "drizzle-orm";
 import type { Db } from "#server/db/client.ts";
+import { isNewestVersion } from "#server/db/newest-version.ts";
 import { machines } from "#server/db/schema/machines.ts";
 import { recipeVersions } from "#server/db/schema/recipe-versions.ts";
 import { recipes } from "#server/db/schema/recipes.ts";
@@ -24,10 +25,7 @@ export async function countRecipesByMachine(tx: Db, shopId: string): Promise<Map
   const rows = await tx
     .select({ machineId: recipeVersions.machineId, recipes: count() })
     .from(recipes)
-    .innerJoin(
-      recipeVersions,
-      and(eq(recipeVersions.recipeId, recipes.id), eq(recipeVersions.number, recipes.currentVersion)),
-    )
+    .innerJoin(recipeVersions, isNewestVersion)
     .where(eq(recipes.shopId, shopId))
     .groupBy(recipeVersions.machineId);
   return new Map(rows.map((row) => [row.machineId, row.recipes]));

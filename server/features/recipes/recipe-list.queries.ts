@@ -1,6 +1,7 @@
 import { and, count, eq, gte, ilike, inArray, isNull, lt, or, type SQL, sql } from "drizzle-orm";
 import type { Db } from "#server/db/client.ts";
 import { isAfter, missingLast, orderedBy, placeOf, type SortKey } from "#server/db/keyset.ts";
+import { isNewestVersion } from "#server/db/newest-version.ts";
 import { machines } from "#server/db/schema/machines.ts";
 import { recipeVersions } from "#server/db/schema/recipe-versions.ts";
 import { recipes } from "#server/db/schema/recipes.ts";
@@ -97,10 +98,7 @@ export async function countRecipes(tx: Db, shopId: string, filter: RecipeFilter)
   const [row] = await tx
     .select({ recipes: count() })
     .from(recipes)
-    .innerJoin(
-      recipeVersions,
-      and(eq(recipeVersions.recipeId, recipes.id), eq(recipeVersions.number, recipes.currentVersion)),
-    )
+    .innerJoin(recipeVersions, isNewestVersion)
     .innerJoin(machines, eq(machines.id, recipeVersions.machineId))
     .leftJoin(shares, eq(shares.recipeId, recipes.id))
     .where(and(eq(recipes.shopId, shopId), matches(filter)));

@@ -1,5 +1,6 @@
 import { and, asc, desc, eq, inArray, isNull, type SQL, sql } from "drizzle-orm";
 import type { Db } from "#server/db/client.ts";
+import { isNewestVersion } from "#server/db/newest-version.ts";
 import { machines } from "#server/db/schema/machines.ts";
 import { memberships } from "#server/db/schema/memberships.ts";
 import { recipeVersions } from "#server/db/schema/recipe-versions.ts";
@@ -36,10 +37,7 @@ export function selectRecipes(tx: Db, shopId: string, filter?: SQL, place: SQL<s
       place,
     })
     .from(recipes)
-    .innerJoin(
-      recipeVersions,
-      and(eq(recipeVersions.recipeId, recipes.id), eq(recipeVersions.number, recipes.currentVersion)),
-    )
+    .innerJoin(recipeVersions, isNewestVersion)
     .innerJoin(machines, eq(machines.id, recipeVersions.machineId))
     .leftJoin(shares, eq(shares.recipeId, recipes.id))
     .leftJoin(memberships, isMemberStill)

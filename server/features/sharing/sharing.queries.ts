@@ -1,5 +1,6 @@
 import { and, asc, desc, eq, isNotNull, ne, sql } from "drizzle-orm";
 import type { Db } from "#server/db/client.ts";
+import { isNewestVersion } from "#server/db/newest-version.ts";
 import { machines } from "#server/db/schema/machines.ts";
 import { memberships } from "#server/db/schema/memberships.ts";
 import { recipeVersions } from "#server/db/schema/recipe-versions.ts";
@@ -77,10 +78,7 @@ export function listCountable(tx: Db, shopId: string, machineId: string) {
     })
     .from(shares)
     .innerJoin(recipes, and(eq(recipes.id, shares.recipeId), eq(recipes.state, "proven")))
-    .innerJoin(
-      recipeVersions,
-      and(eq(recipeVersions.recipeId, recipes.id), eq(recipeVersions.number, recipes.currentVersion)),
-    )
+    .innerJoin(recipeVersions, isNewestVersion)
     .where(and(eq(shares.shopId, shopId), eq(recipeVersions.machineId, machineId), isNotNull(recipeVersions.provenAt)))
     .orderBy(desc(recipeVersions.provenAt), asc(recipes.id));
 }
