@@ -19,6 +19,8 @@ export const editions = pgTable(
     networkFigures: jsonb("network_figures").notNull(),
     /** What changed against the edition before, for whoever decides to publish. */
     changes: jsonb("changes").notNull(),
+    /** How many groups it shows. */
+    releasedGroups: integer("released_groups").notNull().default(0),
     builtAt: timestamp("built_at", { withTimezone: true }).notNull().defaultNow(),
     publishedAt: timestamp("published_at", { withTimezone: true }),
     publishedBy: uuid("published_by").references(() => users.id, { onDelete: "set null" }),

@@ -36,7 +36,7 @@ export async function insertEdition(tx: Db, values: typeof editions.$inferInsert
 export async function completeEdition(
   tx: Db,
   id: string,
-  values: { digest: string; networkFigures: NetworkFigures; changes: EditionChanges },
+  values: { digest: string; networkFigures: NetworkFigures; changes: EditionChanges; releasedGroups: number },
 ): Promise<void> {
   await tx.update(editions).set(values).where(eq(editions.id, id));
 }

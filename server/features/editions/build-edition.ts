@@ -114,7 +114,7 @@ class Summary {
       .copy()
       .update(`${canonicalJson(network)}\n`)
       .digest("hex");
-    return { digest, networkFigures: network, changes: this.changes };
+    return { digest, networkFigures: network, changes: this.changes, releasedGroups: this.released.length };
   }
 }
 

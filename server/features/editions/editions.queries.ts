@@ -31,10 +31,9 @@ export async function findNewestBuilt(tx: Db): Promise<EditionRow | undefined> {
   return row;
 }
 
-/** Newest first, each with how many groups it shows. */
-export async function listEditions(tx: Db): Promise<{ edition: EditionRow; releasedGroups: number }[]> {
-  const releasedGroups = sql<number>`(select count(*)::integer from edition_groups g where g.edition_id = ${editions.id} and g.figures ->> 'status' = 'released')`;
-  return tx.select({ edition: editions, releasedGroups }).from(editions).orderBy(desc(editions.number));
+/** Newest first. */
+export function listEditions(tx: Db): Promise<EditionRow[]> {
+  return tx.select().from(editions).orderBy(desc(editions.number));
 }
 
 /** Day each published edition came out, by its number. */

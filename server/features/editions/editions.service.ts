@@ -14,10 +14,10 @@ import { parsePeerGroupId } from "#shared/peers/peer-group.ts";
 import * as queries from "./editions.queries.ts";
 import { presentFigures, presentPublished, withoutDensity } from "./released.ts";
 
-/** Row-level security shows a member published editions only; an admin sees what waits to be published too. */
+/** What an edition says is read once it is published, by nobody before. */
 async function requireEdition(tx: Db, id: string): Promise<queries.EditionRow> {
   const row = await queries.findEdition(tx, id);
-  if (!row || row.state === "discarded") throw new ProblemError("not-found", { detail: "There is no such edition" });
+  if (row?.state !== "published") throw new ProblemError("not-found", { detail: "There is no such edition" });
   return row;
 }
 
@@ -30,7 +30,7 @@ export async function findCurrentEdition(tx: Db): Promise<PublishedEdition | nul
 export async function etagOf(tx: Db, id: string, address: string): Promise<string> {
   const row = await requireEdition(tx, id);
   return createHash("sha256")
-    .update(`${row.digest} ${presentPublished(row).date} ${row.state} ${address}`)
+    .update(`${row.digest} ${presentPublished(row).date} ${address}`)
     .digest("base64url");
 }
 

@@ -11,7 +11,7 @@ type Decider = { userId: string | null };
 
 export async function listEditions(tx: Db): Promise<Edition[]> {
   const rows = await queries.listEditions(tx);
-  return rows.map(({ edition, releasedGroups }) => presentEdition(edition, releasedGroups));
+  return rows.map(presentEdition);
 }
 
 async function requireListed(tx: Db, id: string): Promise<Edition> {

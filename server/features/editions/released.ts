@@ -11,13 +11,13 @@ export function presentPublished(row: EditionRow): PublishedEdition {
   return { id: row.id, number: row.number, date: dayOf(row.publishedAt ?? row.builtAt) };
 }
 
-export function presentEdition(row: EditionRow, releasedGroups: number): Edition {
+export function presentEdition(row: EditionRow): Edition {
   return {
     ...presentPublished(row),
     state: row.state,
     builtAt: row.builtAt.toISOString(),
     publishedAt: row.publishedAt?.toISOString() ?? null,
-    releasedGroups,
+    releasedGroups: row.releasedGroups,
     changes: EditionChanges.parse(row.changes),
   };
 }

@@ -1,0 +1,3 @@
+ALTER TABLE "editions" ADD COLUMN "released_groups" integer DEFAULT 0 NOT NULL;--> statement-breakpoint
+ALTER POLICY "edition_groups_published" ON "edition_groups" TO web USING ((select nullif(current_setting('app.user_id', true), '')::uuid) is not null and exists (select 1 from editions e where e.id = edition_id and e.state = 'published'));--> statement-breakpoint
+ALTER POLICY "listed_recipes_published" ON "listed_recipes" TO web USING ((select nullif(current_setting('app.user_id', true), '')::uuid) is not null and exists (select 1 from editions e where e.id = edition_id and e.state = 'published'));
