@@ -1,6 +1,7 @@
 import { randomBytes } from "node:crypto";
 import { inject } from "vitest";
 import { createOwnedDatabase, roles, withClient } from "#server/db/bootstrap.ts";
+import { openDatabase } from "#server/db/client.ts";
 
 /** One database of a test file's own, migrated and empty. */
 export interface TestDatabase {
@@ -34,4 +35,17 @@ export async function createTestDatabase(): Promise<TestDatabase> {
       await withClient(postgres.superuserUrl, (client) => client.query(`drop database if exists ${name} with (force)`));
     },
   };
+}
+
+/** The same, open as each of its roles. Call `close` when the file is done: it drops the database too. */
+export async function openTestDatabase() {
+  const database = await createTestDatabase();
+  const owner = openDatabase(database.ownerUrl);
+  const web = openDatabase(database.webUrl);
+  const builder = openDatabase(database.builderUrl);
+  const close = async () => {
+    await Promise.all([owner.close(), web.close(), builder.close()]);
+    await database.drop();
+  };
+  return { ...database, owner, web, builder, close };
 }

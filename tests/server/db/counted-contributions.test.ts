@@ -1,25 +1,14 @@
 import { eq } from "drizzle-orm";
-import { afterAll, beforeAll, expect, test } from "vitest";
-import { type Database, openDatabase } from "#server/db/client.ts";
+import { afterAll, expect, test } from "vitest";
 import { recipeVersions } from "#server/db/schema/recipe-versions.ts";
 import { recipes } from "#server/db/schema/recipes.ts";
 import { peerGroupOf } from "#shared/peers/peer-group.ts";
-import { createTestDatabase, type TestDatabase } from "../../support/database.ts";
+import { openTestDatabase } from "../../support/database.ts";
 import { makeMachine, makeRecipe, makeStaffedShop } from "../../support/factories.ts";
 
-let database: TestDatabase;
-let owner: Database;
-let builder: Database;
+const { owner, builder, close } = await openTestDatabase();
 
-beforeAll(async () => {
-  database = await createTestDatabase();
-  owner = openDatabase(database.ownerUrl);
-  builder = openDatabase(database.builderUrl);
-});
-afterAll(async () => {
-  await Promise.all([owner.close(), builder.close()]);
-  await database.drop();
-});
+afterAll(close);
 
 async function makeShared(values: Parameters<typeof makeRecipe>[3] = {}) {
   const { shop } = await makeStaffedShop(owner);

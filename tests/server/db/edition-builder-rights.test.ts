@@ -1,22 +1,10 @@
-import { afterAll, beforeAll, expect, test } from "vitest";
-import { type Database, openDatabase } from "#server/db/client.ts";
-import { createTestDatabase, type TestDatabase } from "../../support/database.ts";
+import { afterAll, expect, test } from "vitest";
+import { openTestDatabase } from "../../support/database.ts";
 import { makeContributor } from "../../support/editions.ts";
 
-let database: TestDatabase;
-let owner: Database;
-let builder: Database;
+const { owner, web, builder, close } = await openTestDatabase();
 
-beforeAll(async () => {
-  database = await createTestDatabase();
-  owner = openDatabase(database.ownerUrl);
-  builder = openDatabase(database.builderUrl, { max: 1 });
-});
-afterAll(async () => {
-  await builder.close();
-  await owner.close();
-  await database.drop();
-});
+afterAll(close);
 
 const hidden = ["users", "shops", "machines", "recipes", "recipe_versions", "shares", "test_cuts", "memberships"];
 
@@ -46,9 +34,7 @@ test("the edition builder writes in the audit log in nobody's name but its own, 
 });
 
 test("the web role reads neither what editions remember nor whose number is whose", async () => {
-  const web = openDatabase(database.webUrl, { max: 1 });
   for (const table of ["edition_memories", "contributors", "contributing_machines", "counted_contributions"]) {
     await expect(web.pool.query(`select 1 from ${table}`), table).rejects.toThrow("permission denied");
   }
-  await web.close();
 });

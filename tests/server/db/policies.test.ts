@@ -1,8 +1,7 @@
 import { randomUUID } from "node:crypto";
 import { afterAll, beforeAll, expect, test } from "vitest";
-import { type Database, openDatabase } from "#server/db/client.ts";
 import { type Ask, actingAs, notAllowed, outcomeOf, type Settings } from "#tests/support/acting.ts";
-import { createTestDatabase } from "#tests/support/database.ts";
+import { openTestDatabase } from "#tests/support/database.ts";
 import { makeRecipe, makeUser } from "#tests/support/factories.ts";
 import { makeTwoShops } from "#tests/support/two-shops.ts";
 
@@ -11,9 +10,7 @@ import { makeTwoShops } from "#tests/support/two-shops.ts";
 const foreignKey = "23503";
 const restricted = "23001";
 
-const database = await createTestDatabase();
-let owner: Database;
-let web: Database;
+const { owner, web, close } = await openTestDatabase();
 let world: Awaited<ReturnType<typeof makeTwoShops>>;
 
 const attempt = (settings: Settings, text: string, values: unknown[] = []) =>
@@ -36,15 +33,9 @@ const invite = (shopId: string, email: string, role: "owner" | "operator", accep
 const join = "insert into memberships (user_id, shop_id, role) values ($1, $2, $3)";
 
 beforeAll(async () => {
-  owner = openDatabase(database.ownerUrl);
-  web = openDatabase(database.webUrl);
   world = await makeTwoShops(owner);
 });
-afterAll(async () => {
-  await web.close();
-  await owner.close();
-  await database.drop();
-});
+afterAll(close);
 
 test("an invitation makes its addressee a member in its role, once", async () => {
   const { user, settings } = await makeOutsider();

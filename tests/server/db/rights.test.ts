@@ -1,27 +1,16 @@
 import { afterAll, beforeAll, expect, test } from "vitest";
-import { type Database, openDatabase } from "#server/db/client.ts";
+import { openDatabase } from "#server/db/client.ts";
 import { actingAs, notAllowed, outcomeOf } from "#tests/support/acting.ts";
-import { createTestDatabase } from "#tests/support/database.ts";
+import { openTestDatabase } from "#tests/support/database.ts";
 import { makeTwoShops } from "#tests/support/two-shops.ts";
 
-const database = await createTestDatabase();
-let owner: Database;
-let web: Database;
-let builder: Database;
+const { owner, web, builder, webUrl, close } = await openTestDatabase();
 let world: Awaited<ReturnType<typeof makeTwoShops>>;
 
 beforeAll(async () => {
-  owner = openDatabase(database.ownerUrl);
-  web = openDatabase(database.webUrl);
-  builder = openDatabase(database.builderUrl);
   world = await makeTwoShops(owner);
 });
-afterAll(async () => {
-  await web.close();
-  await builder.close();
-  await owner.close();
-  await database.drop();
-});
+afterAll(close);
 
 const asOwnerOfShop = (text: string) => {
   const { boss, shop } = world.victim;
@@ -163,7 +152,7 @@ test.each([
 });
 
 test("settings of one transaction are gone in the next on the same connection", async () => {
-  const single = openDatabase(database.webUrl, { max: 1 });
+  const single = openDatabase(webUrl, { max: 1 });
   const { boss, shop } = world.victim;
   await actingAs(single, { user_id: boss.id, shop_id: shop.id, email: boss.email, admin: "yes" }, (ask) =>
     ask("select 1"),

@@ -1,7 +1,6 @@
 import { afterAll, beforeAll, describe, expect, test } from "vitest";
-import { type Database, openDatabase } from "#server/db/client.ts";
 import { actingAs, notAllowed, outcomeOf, type Settings } from "#tests/support/acting.ts";
-import { createTestDatabase } from "#tests/support/database.ts";
+import { openTestDatabase } from "#tests/support/database.ts";
 import { makeTwoShops } from "#tests/support/two-shops.ts";
 
 /**
@@ -37,9 +36,7 @@ const decisions: Record<string, "own" | "nothing" | "published" | "refused"> = {
 const views = ["counted_contributions"];
 const tables = Object.keys(decisions).filter((name) => !views.includes(name));
 
-const database = await createTestDatabase();
-let owner: Database;
-let web: Database;
+const { owner, web, close } = await openTestDatabase();
 let world: Awaited<ReturnType<typeof makeTwoShops>>;
 let settings: Settings;
 
@@ -64,17 +61,11 @@ function ofStranger({ json }: Row): boolean {
 }
 
 beforeAll(async () => {
-  owner = openDatabase(database.ownerUrl);
-  web = openDatabase(database.webUrl);
   world = await makeTwoShops(owner);
   const { boss, shop } = world.stranger;
   settings = { user_id: boss.id, shop_id: shop.id, email: boss.email };
 });
-afterAll(async () => {
-  await web.close();
-  await owner.close();
-  await database.drop();
-});
+afterAll(close);
 
 test("every table and view of the database has a decision", async () => {
   const { rows } = await owner.pool.query(

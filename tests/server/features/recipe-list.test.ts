@@ -1,11 +1,12 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from "vitest";
 import type { Recipe } from "#shared/contracts/recipes.ts";
 import { createTestApi, type TestApi, type TestClient } from "../../support/api.ts";
-import { makeMachine, makeRecipe, makeStaffedShop } from "../../support/factories.ts";
+import { type MadeMachine, makeBook, type StaffedShop } from "../../support/book.ts";
+import { makeMachine, makeRecipe } from "../../support/factories.ts";
 
 let api: TestApi;
-let own: Awaited<ReturnType<typeof makeStaffedShop>>;
-let machine: Awaited<ReturnType<typeof makeMachine>>;
+let own: StaffedShop;
+let machine: MadeMachine;
 let boss: TestClient;
 
 const nobody = "00000000-0000-4000-8000-000000000000";
@@ -16,9 +17,7 @@ beforeAll(async () => {
 afterAll(() => api.close());
 
 beforeEach(async () => {
-  own = await makeStaffedShop(api.owner);
-  machine = await makeMachine(api.owner, own.shop.id);
-  boss = await api.as(own.boss.id);
+  ({ own, machine, boss } = await makeBook(api));
 });
 
 describe("the list", () => {

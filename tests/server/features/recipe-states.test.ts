@@ -4,20 +4,13 @@ import { memberships } from "#server/db/schema/memberships.ts";
 import { shops } from "#server/db/schema/shops.ts";
 import type { Recipe } from "#shared/contracts/recipes.ts";
 import { createTestApi, type TestApi, type TestClient } from "../../support/api.ts";
-import {
-  makeAdmin,
-  makeMachine,
-  makeRecipe,
-  makeRecipeContent,
-  makeStaffedShop,
-  makeTestCut,
-  plainSetpoints,
-} from "../../support/factories.ts";
+import { type MadeMachine, makeBook, type StaffedShop } from "../../support/book.ts";
+import { makeAdmin, makeRecipe, makeRecipeContent, makeTestCut, plainSetpoints } from "../../support/factories.ts";
 
 let api: TestApi;
-let own: Awaited<ReturnType<typeof makeStaffedShop>>;
-let other: Awaited<ReturnType<typeof makeStaffedShop>>;
-let machine: Awaited<ReturnType<typeof makeMachine>>;
+let own: StaffedShop;
+let other: StaffedShop;
+let machine: MadeMachine;
 let boss: TestClient;
 
 beforeAll(async () => {
@@ -26,10 +19,7 @@ beforeAll(async () => {
 afterAll(() => api.close());
 
 beforeEach(async () => {
-  own = await makeStaffedShop(api.owner);
-  other = await makeStaffedShop(api.owner);
-  machine = await makeMachine(api.owner, own.shop.id);
-  boss = await api.as(own.boss.id);
+  ({ own, other, machine, boss } = await makeBook(api));
 });
 
 /** Id of a draft one of the shop keeps. */

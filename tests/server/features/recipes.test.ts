@@ -3,19 +3,13 @@ import { afterAll, beforeAll, beforeEach, describe, expect, test } from "vitest"
 import { shops } from "#server/db/schema/shops.ts";
 import { Recipe } from "#shared/contracts/recipes.ts";
 import { createTestApi, type TestApi, type TestClient } from "../../support/api.ts";
-import {
-  makeAdmin,
-  makeMachine,
-  makeRecipe,
-  makeRecipeContent,
-  makeStaffedShop,
-  plainSetpoints,
-} from "../../support/factories.ts";
+import { type MadeMachine, makeBook, type StaffedShop } from "../../support/book.ts";
+import { makeAdmin, makeMachine, makeRecipe, makeRecipeContent, plainSetpoints } from "../../support/factories.ts";
 
 let api: TestApi;
-let own: Awaited<ReturnType<typeof makeStaffedShop>>;
-let other: Awaited<ReturnType<typeof makeStaffedShop>>;
-let machine: Awaited<ReturnType<typeof makeMachine>>;
+let own: StaffedShop;
+let other: StaffedShop;
+let machine: MadeMachine;
 let boss: TestClient;
 let operator: TestClient;
 
@@ -27,10 +21,7 @@ beforeAll(async () => {
 afterAll(() => api.close());
 
 beforeEach(async () => {
-  own = await makeStaffedShop(api.owner);
-  other = await makeStaffedShop(api.owner);
-  machine = await makeMachine(api.owner, own.shop.id);
-  boss = await api.as(own.boss.id);
+  ({ own, other, machine, boss } = await makeBook(api));
   operator = await api.as(own.operator.id);
 });
 

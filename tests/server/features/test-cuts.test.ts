@@ -5,21 +5,20 @@ import { recipeVersions } from "#server/db/schema/recipe-versions.ts";
 import { shops } from "#server/db/schema/shops.ts";
 import { TestCut } from "#shared/contracts/test-cuts.ts";
 import { createTestApi, type TestApi, type TestClient } from "../../support/api.ts";
+import { type MadeMachine, makeBook, type StaffedShop } from "../../support/book.ts";
 import {
   makeAdmin,
-  makeMachine,
   makeRecipe,
   makeRecipeContent,
-  makeStaffedShop,
   makeTestCut,
   makeTestCutInput,
   plainSetpoints,
 } from "../../support/factories.ts";
 
 let api: TestApi;
-let own: Awaited<ReturnType<typeof makeStaffedShop>>;
-let other: Awaited<ReturnType<typeof makeStaffedShop>>;
-let machine: Awaited<ReturnType<typeof makeMachine>>;
+let own: StaffedShop;
+let other: StaffedShop;
+let machine: MadeMachine;
 let recipeId: string;
 let boss: TestClient;
 
@@ -29,11 +28,8 @@ beforeAll(async () => {
 afterAll(() => api.close());
 
 beforeEach(async () => {
-  own = await makeStaffedShop(api.owner);
-  other = await makeStaffedShop(api.owner);
-  machine = await makeMachine(api.owner, own.shop.id);
+  ({ own, other, machine, boss } = await makeBook(api));
   recipeId = (await makeRecipe(api.owner, own.shop.id, machine.id)).recipe.id;
-  boss = await api.as(own.boss.id);
 });
 
 const record = (client: TestClient, values: Parameters<typeof makeTestCutInput>[0] = {}, id = recipeId) =>

@@ -1,23 +1,12 @@
-import { afterAll, beforeAll, expect, test } from "vitest";
-import { type Database, openDatabase } from "#server/db/client.ts";
+import { afterAll, expect, test } from "vitest";
 import { forgetOldAnswers } from "#server/http/idempotency.queries.ts";
 import { countHit, forgetPassedWindows } from "#server/http/rate-limit.queries.ts";
-import { createTestDatabase, type TestDatabase } from "../../support/database.ts";
+import { openTestDatabase } from "../../support/database.ts";
 import { makeUser } from "../../support/factories.ts";
 
-let database: TestDatabase;
-let owner: Database;
-let web: Database;
+const { owner, web, close } = await openTestDatabase();
 
-beforeAll(async () => {
-  database = await createTestDatabase();
-  owner = openDatabase(database.ownerUrl);
-  web = openDatabase(database.webUrl);
-});
-afterAll(async () => {
-  await Promise.all([owner.close(), web.close()]);
-  await database.drop();
-});
+afterAll(close);
 
 test("answers older than two days are forgotten, younger ones kept, whoever they were for", async () => {
   const user = await makeUser(owner);
