@@ -1,7 +1,7 @@
 import type { ReactNode } from "react";
 import { z } from "zod";
-import { Button } from "../ui/button.tsx";
 import { Dialog } from "../ui/dialog.tsx";
+import { DialogButtons } from "../ui/dialog-buttons.tsx";
 import { TextAreaField } from "../ui/text-field.tsx";
 import { useProblemForm } from "./form.ts";
 import { DraftNotice, FormProblem } from "./form-problem.tsx";
@@ -39,14 +39,7 @@ export function ReasonDialog(props: ReasonDialogProps) {
         <DraftNotice restored={f.restored} onStartOver={f.startOver} />
         <FormProblem problem={f.problem} />
         <TextAreaField label={label} hint={hint} rows={3} {...f.field("reason")} />
-        <div className="flex flex-wrap gap-2">
-          <Button type="submit" kind="danger" pending={f.pending}>
-            {act}
-          </Button>
-          <Button kind="quiet" onClick={onClose}>
-            Keep as it is
-          </Button>
-        </div>
+        <DialogButtons act={act} kind="danger" pending={f.pending} onClose={onClose} />
       </form>
     </Dialog>
   );

@@ -1,6 +1,6 @@
 import { type FormEvent, type ReactNode, useEffect, useRef, useState } from "react";
-import { Button } from "./button.tsx";
 import { Dialog } from "./dialog.tsx";
+import { DialogButtons } from "./dialog-buttons.tsx";
 import { TextField } from "./text-field.tsx";
 
 export interface ConfirmDialogProps {
@@ -63,14 +63,7 @@ function OpenConfirmDialog(props: ConfirmDialogProps) {
             {error}
           </p>
         ) : null}
-        <div className="flex flex-wrap gap-2">
-          <Button type="submit" kind={kind} pending={pending}>
-            {act}
-          </Button>
-          <Button kind="quiet" onClick={onClose}>
-            Keep as it is
-          </Button>
-        </div>
+        <DialogButtons act={act} kind={kind} pending={pending} onClose={onClose} />
       </form>
     </Dialog>
   );

@@ -48,7 +48,7 @@ describe("thickness", () => {
     expect(unitSystems.map((units) => storedOf(text, "thickness", units))).toEqual([mm, mm]);
   });
 
-  test("takes a bare number in the member's unit", () => {
+  test("takes a bare thickness or nozzle in the member's unit", () => {
     expect([storedOf("3", "thickness", "metric"), storedOf("0.25", "thickness", "inch")]).toEqual([3, 6.35]);
     expect([storedOf("1.1", "nozzle", "metric"), storedOf("1.1", "nozzle", "inch")]).toEqual([1.1, 1.1]);
   });
@@ -89,7 +89,7 @@ describe("feed", () => {
     expect(storedOf(text, "feed")).toBe(mmMin);
   });
 
-  test("takes a bare number in the member's unit", () => {
+  test("takes a bare feed in the member's unit", () => {
     expect([storedOf("2,400", "feed", "metric"), storedOf("100", "feed", "inch")]).toEqual([2400, 2540]);
   });
 
