@@ -26,17 +26,23 @@ export function findOrMakeUser(db: Db, provider: string, identity: Identity): Pr
     const user = known ?? (await makeUser(tx, provider, identity));
     if (verified) {
       await actAs(tx, { user_id: user.id });
-      const joined = await acceptInvitation(tx, user.id, email);
-      if (joined) await greetInShop(tx, joined);
+      await joinIfInvited(tx, user.id, email);
     }
     return user.id;
   });
 }
 
-/** A name more that must not stand in what the shop has written for others. */
-async function greetInShop(tx: Db, shopId: string): Promise<void> {
+/**
+ * Makes somebody a member where an invitation waits for their address, which the caller knows to be verified.
+ * @returns whether they joined
+ */
+export async function joinIfInvited(tx: Db, userId: string, email: string): Promise<boolean> {
+  const shopId = await acceptInvitation(tx, userId, email);
+  if (shopId === undefined) return false;
+  // A name more that must not stand in what the shop has written for others.
   await actAs(tx, { shop_id: shopId });
   await emptyTellingTexts(tx, shopId);
+  return true;
 }
 
 async function makeUser(tx: Db, provider: string, { sub, email, name }: Identity): Promise<UserRow> {

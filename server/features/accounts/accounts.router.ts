@@ -2,7 +2,7 @@ import { type Request, Router } from "express";
 import type { Db } from "#server/db/client.ts";
 import { route } from "#server/http/route.ts";
 import * as contracts from "#shared/contracts/accounts.ts";
-import { changePreferences, sessionOf } from "./accounts.service.ts";
+import { changePreferences, joinWhereInvited, sessionOf } from "./accounts.service.ts";
 
 export interface AccountsOptions {
   demo: boolean;
@@ -13,7 +13,9 @@ export interface AccountsOptions {
 export function accountsRouter(db: Db, options: AccountsOptions): Router {
   const router = Router();
 
-  route(router, db, contracts.getSession, async ({ actor }) => sessionOf(actor, options.demo));
+  route(router, db, contracts.getSession, async ({ tx, actor }) =>
+    sessionOf(await joinWhereInvited(tx, actor), options.demo),
+  );
 
   route(router, db, contracts.changePreferences, async ({ tx, actor, body }) =>
     sessionOf(await changePreferences(tx, actor, body), options.demo),

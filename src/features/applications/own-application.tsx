@@ -1,8 +1,8 @@
 import { useSuspenseQuery } from "@tanstack/react-query";
 import { useNavigate } from "react-router-dom";
 import { formatDate } from "#shared/units/dates.ts";
-import { useSession, useSignOut } from "../../shell/session.queries.ts";
-import { Button } from "../../ui/button.tsx";
+import { useSession } from "../../shell/session.queries.ts";
+import { buttonClasses } from "../../ui/button.tsx";
 import { Notice } from "../../ui/notice.tsx";
 import { PageHeader } from "../../ui/page-header.tsx";
 import { ApplicationForm } from "./application-form.tsx";
@@ -35,8 +35,11 @@ export function OwnApplication() {
     return (
       <>
         <PageHeader title={`${application.shopName} is admitted`} facts={sent} />
-        <p className="mb-4 max-w-text">The shop opens at a sign-in. Sign out, then in again with the same account.</p>
-        <SignOutButton />
+        <p className="mb-4 max-w-text">You own it from now on. First describe the machine, then its recipes.</p>
+        {/* A page load, not a route: the session is asked for anew, and with it the shop. */}
+        <a href="/" className={buttonClasses("primary")}>
+          Open the shop
+        </a>
       </>
     );
   }
@@ -65,14 +68,5 @@ function Address() {
       No application is known from <b>{user?.email}</b>. If you sent one from another address, sign out and in again
       with that one.
     </p>
-  );
-}
-
-function SignOutButton() {
-  const signOut = useSignOut();
-  return (
-    <Button kind="primary" pending={signOut.isPending || signOut.isSuccess} onClick={() => signOut.mutateAsync()}>
-      Sign out
-    </Button>
   );
 }

@@ -31,6 +31,18 @@ test("an admin has no shop; somebody new has neither", async () => {
   expect((await (await api.as(user.id)).get("/api/session")).body).toMatchObject({ admin: false, shop: null });
 });
 
+test("somebody invited while signed in belongs to the shop when they next look", async () => {
+  const [user, { shop }] = [await makeUser(api.owner), await makeStaffedShop(api.owner)];
+  const client = await api.as(user.id);
+  expect((await client.get("/api/session")).body.shop).toBeNull();
+  const invite = "insert into invitations (shop_id, email, role) values ($1, $2, 'operator')";
+  await api.owner.pool.query(invite, [shop.id, "somebody.else@person.example"]);
+  expect((await client.get("/api/session")).body.shop, "an invitation to another address").toBeNull();
+  await api.owner.pool.query(invite, [shop.id, user.email]);
+  expect((await client.get("/api/session")).body.shop).toMatchObject({ id: shop.id, role: "operator" });
+  await client.get("/api/recipes").expect(200);
+});
+
 test("an admin who also belongs to a shop acts for the network alone", async () => {
   const { boss } = await makeStaffedShop(api.owner);
   const client = await api.as(boss.id);
