@@ -31,8 +31,9 @@ function outcomeOf(error: unknown): Outcome {
 export function signIn(db: Db, settings: SignInSettings) {
   const passport = new Passport();
   const discover = providerDiscovery(settings.issuer);
+  // What signs in is what `findUser` gave: passport hands it on without its type.
   passport.serializeUser<string>((user, done) => done(null, (user as SignedIn).id));
-  passport.deserializeUser<string>((id, done) => done(null, { id } as Express.User));
+  passport.deserializeUser<string>((id, done) => done(null, { id }));
   let ready = false;
   const prepare = async () => {
     const discovery = await discover();
@@ -44,6 +45,7 @@ export function signIn(db: Db, settings: SignInSettings) {
       callbackUrl: `${settings.publicUrl}/auth/callback`,
       findUser: (identity) => findOrMakeUser(db, settings.providerName, identity),
     });
+    // Built on the parts the published types leave out, so they do not know it for a strategy.
     passport.use(strategy as unknown as Strategy);
     ready = true;
   };
@@ -89,7 +91,7 @@ export function signIn(db: Db, settings: SignInSettings) {
 /** passport regenerates the session as it signs in, so what must outlive that is set afterwards. */
 async function finishSignIn(req: Request, res: Response, user: SignedIn): Promise<void> {
   await new Promise<void>((resolve, reject) => {
-    req.logIn(user as unknown as Express.User, (error: unknown) => (error ? reject(error) : resolve()));
+    req.logIn(user, (error: unknown) => (error ? reject(error) : resolve()));
   });
   req.session.idToken = user.idToken;
   res.redirect(user.returnTo);

@@ -19,6 +19,7 @@ const rowsAtOnce = 1000;
 
 async function insertAll<Table extends PgTable>(tx: Db, table: Table, rows: Table["$inferInsert"][]): Promise<void> {
   for (let i = 0; i < rows.length; i += rowsAtOnce) {
+    // Drizzle does not resolve the insert type of a table it is only told later.
     await tx.insert(table).values(rows.slice(i, i + rowsAtOnce) as never);
   }
 }
