@@ -8,7 +8,7 @@ import { seedDemo } from "./seed-demo.ts";
 
 const help = `Fills an empty database with the demo network.
 
-  npm run seed -- --shops N   so many shops (66), about 24 recipes each
+  npm run seed -- --shops N   so many shops (68), about 24 recipes each
 
   --data DIR   folder of the start command, whose database is used unless OWNER_DATABASE_URL is set (.local).
                Start it with --no-seed first, so that its database is there and empty.`;
@@ -19,7 +19,7 @@ const SeedSettings = WorkerSettings.extend({ OWNER_DATABASE_URL: z.string().min(
 async function main(): Promise<void> {
   const { values } = parseArgs({
     options: {
-      shops: { type: "string", default: "66" },
+      shops: { type: "string", default: "68" },
       data: { type: "string", default: ".local" },
       help: { type: "boolean", short: "h", default: false },
     },

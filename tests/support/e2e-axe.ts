@@ -30,11 +30,22 @@ export async function settle(page: Page): Promise<void> {
   await expect.poll(() => page.locator(".skeleton").count(), { timeout: 20_000 }).toBe(0);
 }
 
+/** Colours glide to the other theme; half-way they belong to neither. */
+async function repainted(page: Page): Promise<void> {
+  await page.evaluate(async () => {
+    const nextFrame = () => new Promise((resolve) => requestAnimationFrame(resolve));
+    await nextFrame();
+    await nextFrame();
+    await Promise.allSettled(document.getAnimations().map((animation) => animation.finished));
+  });
+}
+
 /** Everyone can use the page as it stands now: axe finds nothing in either theme, and nothing is cut off at the side. */
 export async function expectUsable(page: Page): Promise<void> {
   await settle(page);
   for (const colorScheme of ["dark", "light"] as const) {
     await page.emulateMedia({ colorScheme });
+    await repainted(page);
     expect(await violations(page, runs[colorScheme]), `${colorScheme}, ${page.url()}`).toEqual([]);
   }
   const { seen, needed } = await page.evaluate(() => ({
